@@ -1,0 +1,14 @@
+/**
+ * `distDir` comes from the environment so that the demo (`.next`) and the tests (`.next-test`) can be
+ * built and served from one checkout at the same time.
+ * @type {import('next').NextConfig}
+ */
+const config = {
+  distDir: process.env.NEXT_DIST_DIR ?? '.next',
+  poweredByHeader: false,
+  reactStrictMode: true,
+  serverExternalPackages: ['sequelize', 'pg', 'pg-boss', '@node-rs/argon2', 'sharp', '@react-pdf/renderer', 'pino'],
+  // The client cache must not show a page from before a sign-out or a change by somebody else.
+  experimental: { staleTimes: { dynamic: 0, static: 30 } },
+};
+export default config;
