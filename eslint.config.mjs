@@ -10,7 +10,13 @@ import { defineConfig, globalIgnores } from 'eslint/config';
 export const LAYERS = [
   {
     target: ['./lib/engine/**', './lib/sizing/**', './lib/lighting/**', './lib/pricing/**'],
-    from: ['./app/**', './components/**', './models/**', './emails/**', './lib/!(engine|sizing|lighting|pricing)/**'],
+    from: [
+      './app/**',
+      './components/**',
+      './models/**',
+      './emails/**',
+      './lib/!(engine|sizing|lighting|pricing)/**',
+    ],
     message: 'Engines import nothing but each other and small numeric or schema packages.',
   },
   {
@@ -24,7 +30,8 @@ export const LAYERS = [
       './lib/*/!(schema|actions)/**',
     ],
     allow: /^\.\/lib\/(engine|sizing|lighting|pricing|messages|units|offline)\//,
-    message: "Components import components, engines, messages, units, offline, and a domain's schema and actions.",
+    message:
+      "Components import components, engines, messages, units, offline, and a domain's schema and actions.",
   },
   {
     target: './models/**',
@@ -58,7 +65,16 @@ export default defineConfig([
   },
   {
     // The environment is read and checked in one place.
-    files: ['app/**', 'components/**', 'lib/**', 'models/**', 'emails/**', 'migrations/**', 'seeders/**', 'proxy.ts'],
+    files: [
+      'app/**',
+      'components/**',
+      'lib/**',
+      'models/**',
+      'emails/**',
+      'migrations/**',
+      'seeders/**',
+      'proxy.ts',
+    ],
     ignores: ['lib/platform/env/**'],
     rules: {
       'no-restricted-properties': [
@@ -74,16 +90,41 @@ export default defineConfig([
         'error',
         {
           patterns: [
-            { group: ['@/app/*', '@/components/*', '@/models/*', '@/emails/*', '@/lib/*', '!@/lib/engine', '!@/lib/sizing', '!@/lib/lighting', '!@/lib/pricing'], message: LAYERS[0].message },
-            { group: ['next', 'next/*', 'react', 'react-dom', 'sequelize', 'pg', 'node:*', 'zod'], message: 'Engines are pure: zod/mini and small numeric packages only.' },
+            {
+              group: [
+                '@/app/*',
+                '@/components/*',
+                '@/models/*',
+                '@/emails/*',
+                '@/lib/*',
+                '!@/lib/engine',
+                '!@/lib/sizing',
+                '!@/lib/lighting',
+                '!@/lib/pricing',
+              ],
+              message: LAYERS[0].message,
+            },
+            {
+              group: ['next', 'next/*', 'react', 'react-dom', 'sequelize', 'pg', 'node:*', 'zod'],
+              message: 'Engines are pure: zod/mini and small numeric packages only.',
+            },
           ],
         },
       ],
       'no-restricted-syntax': [
         'error',
-        { selector: "MemberExpression[object.name='Math'][property.name='random']", message: 'Randomness only by a seed that is passed in.' },
-        { selector: "NewExpression[callee.name='Date'][arguments.length=0]", message: 'Engines have no clock.' },
-        { selector: "MemberExpression[object.name='Date'][property.name='now']", message: 'Engines have no clock.' },
+        {
+          selector: "MemberExpression[object.name='Math'][property.name='random']",
+          message: 'Randomness only by a seed that is passed in.',
+        },
+        {
+          selector: "NewExpression[callee.name='Date'][arguments.length=0]",
+          message: 'Engines have no clock.',
+        },
+        {
+          selector: "MemberExpression[object.name='Date'][property.name='now']",
+          message: 'Engines have no clock.',
+        },
       ],
     },
   },

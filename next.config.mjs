@@ -7,7 +7,15 @@ const config = {
   distDir: process.env.NEXT_DIST_DIR ?? '.next',
   poweredByHeader: false,
   reactStrictMode: true,
-  serverExternalPackages: ['sequelize', 'pg', 'pg-boss', '@node-rs/argon2', 'sharp', '@react-pdf/renderer', 'pino'],
+  serverExternalPackages: [
+    'sequelize',
+    'pg',
+    'pg-boss',
+    '@node-rs/argon2',
+    'sharp',
+    '@react-pdf/renderer',
+    'pino',
+  ],
   // The client cache must not show a page from before a sign-out or a change by somebody else.
   experimental: { staleTimes: { dynamic: 0, static: 30 } },
 };

@@ -12,7 +12,11 @@ export default defineConfig({
         extends: true,
         test: {
           name: 'pure',
-          include: ['tests/unit/**/*.test.{ts,tsx}', 'tests/reference/**/*.test.ts', 'tests/guards/**/*.test.ts'],
+          include: [
+            'tests/unit/**/*.test.{ts,tsx}',
+            'tests/reference/**/*.test.ts',
+            'tests/guards/**/*.test.ts',
+          ],
           exclude: ['tests/guards/**/*.db.test.ts'],
           environment: 'node',
           testTimeout: 30_000,
