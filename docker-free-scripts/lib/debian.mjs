@@ -1,60 +1,69 @@
 /** Debian packages, installed when missing: `sudo` when not root. */
-import { spawnSync } from 'node:child_process';
-import { existsSync, mkdirSync, readdirSync, readFileSync, writeFileSync } from 'node:fs';
+import { existsSync, readdirSync } from 'node:fs';
 import { join } from 'node:path';
 import { say, Stop } from './paths.mjs';
 
 const POSTGRES_HOME = '/usr/lib/postgresql';
+export const isRoot = () => process.getuid?.() === 0;
 
-/** The newest installed server's program folder; Debian does not put it on PATH. */
-export function postgresBin() {
-  const versions = existsSync(POSTGRES_HOME) ? readdirSync(POSTGRES_HOME) : [];
-  const found = versions
+/**
+ * The program folder of an installed server, null without one; Debian does not put it on PATH.
+ * @param version the major version that made a data folder; without it the newest
+ */
+export function postgresBin(version) {
+  const installed = existsSync(POSTGRES_HOME) ? readdirSync(POSTGRES_HOME) : [];
+  const found = installed
+    .filter((name) => version === undefined || name === version)
     .sort((a, b) => Number(b) - Number(a))
-    .map((version) => join(POSTGRES_HOME, version, 'bin'))
+    .map((name) => join(POSTGRES_HOME, name, 'bin'))
     .find((bin) => existsSync(join(bin, 'postgres')) && existsSync(join(bin, 'initdb')));
   return found ?? null;
 }
 
+/** Debian 12 has version 15; later releases bring theirs by the package without a number. */
 const WANTED = {
   postgresql: { packages: ['postgresql-15', 'postgresql'], present: () => postgresBin() !== null },
   chromium: { packages: ['chromium'], present: () => existsSync('/usr/bin/chromium') },
   ngspice: { packages: ['ngspice'], present: () => existsSync('/usr/bin/ngspice') },
 };
 
-function asRoot(command, args) {
-  const root = process.getuid?.() === 0;
-  const [program, rest] = root ? [command, args] : ['sudo', [command, ...args]];
-  return spawnSync(program, rest, {
-    stdio: ['inherit', 'ignore', 'inherit'],
-    env: { ...process.env, DEBIAN_FRONTEND: 'noninteractive' },
-  });
-}
-
 /** Debian's package would start a cluster of its own on the usual port; ours is private. */
-function refuseMainCluster() {
-  const file = '/etc/postgresql-common/createcluster.conf';
-  if (process.getuid?.() === 0) {
-    mkdirSync('/etc/postgresql-common', { recursive: true });
-    const text = existsSync(file) ? readFileSync(file, 'utf8') : '';
-    if (!/^create_main_cluster\s*=\s*false/m.test(text)) writeFileSync(file, `${text}\ncreate_main_cluster = false\n`);
-    return;
-  }
-  asRoot('sh', ['-c', `mkdir -p /etc/postgresql-common && echo 'create_main_cluster = false' >> ${file}`]);
+const REFUSE_MAIN_CLUSTER = `
+file=/etc/postgresql-common/createcluster.conf
+mkdir -p /etc/postgresql-common
+grep -qs '^create_main_cluster *= *false' "$file" || echo 'create_main_cluster = false' >> "$file"`;
+
+/** Attached to the terminal: sudo may ask for a password there. */
+function asRoot(children, program, args) {
+  const env = { ...process.env, DEBIAN_FRONTEND: 'noninteractive' };
+  const [command, rest] = isRoot()
+    ? [program, args]
+    : ['sudo', ['DEBIAN_FRONTEND=noninteractive', program, ...args]];
+  return children.run('apt', command, rest, { show: true, attached: true, env });
 }
 
-export function ensureDebianPackages(names) {
+async function install(children, name) {
+  for (const wanted of WANTED[name].packages) {
+    await asRoot(children, 'apt-get', ['install', '-y', '-qq', '--no-install-recommends', wanted]);
+    if (WANTED[name].present()) return;
+  }
+  throw new Stop(`apt-get could not install ${name}; what it said stands above.`);
+}
+
+export async function ensureDebianPackages(children, names) {
   const missing = names.filter((name) => !WANTED[name].present());
   if (missing.length === 0) return;
+  const list = missing.join(', ');
   if (!existsSync('/usr/bin/apt-get'))
-    throw new Stop(`This machine lacks ${missing.join(', ')} and is not Debian: install them and run this again.`);
-  say(`Installing Debian packages: ${missing.join(', ')} …`);
-  if (missing.includes('postgresql')) refuseMainCluster();
-  asRoot('apt-get', ['update', '-qq']);
-  for (const name of missing) {
-    const done = WANTED[name].packages.some(
-      (wanted) => asRoot('apt-get', ['install', '-y', '-qq', '--no-install-recommends', wanted]).status === 0,
+    throw new Stop(
+      `This machine lacks ${list} and has no apt-get: this command sets up Debian 12 and its kin only.`,
     );
-    if (!done || !WANTED[name].present()) throw new Stop(`apt-get could not install ${name}; what it said stands above.`);
-  }
+  if (!isRoot() && !existsSync('/usr/bin/sudo'))
+    throw new Stop(
+      `This machine lacks ${list}. As root, run: apt-get install --no-install-recommends ${missing.map((name) => WANTED[name].packages[0]).join(' ')}`,
+    );
+  say(`Installing Debian packages: ${list} …`);
+  if (missing.includes('postgresql')) await asRoot(children, 'sh', ['-c', REFUSE_MAIN_CLUSTER]);
+  await asRoot(children, 'apt-get', ['update', '-qq']);
+  for (const name of missing) await install(children, name);
 }

@@ -4,7 +4,7 @@ import { join } from 'node:path';
 
 export const ROOT = fileURLToPath(new URL('../..', import.meta.url)).replace(/\/$/, '');
 export const script = (name) => join(ROOT, 'docker-free-scripts', name);
-export const dataFolder = (name) => join(ROOT, name);
+export const nextBin = join(ROOT, 'node_modules', 'next', 'dist', 'bin', 'next');
 
 export const say = (text) => process.stdout.write(`${text}\n`);
 export const complain = (text) => process.stderr.write(`${text}\n`);

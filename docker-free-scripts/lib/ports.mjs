@@ -1,21 +1,32 @@
 /** Ports and secrets that stay the same over restarts: a moved port loses offline data and mailed links. */
-import { randomBytes } from 'node:crypto';
-import { mkdirSync, readFileSync, writeFileSync } from 'node:fs';
+import { randomBytes, randomInt } from 'node:crypto';
+import { existsSync, mkdirSync, readFileSync, renameSync, writeFileSync } from 'node:fs';
 import { createServer } from 'node:net';
 import { dirname, join } from 'node:path';
-import { say } from './paths.mjs';
+import { say, Stop } from './paths.mjs';
+
+/** Below Linux's range for outgoing connections (32768 and up), one of which could hold a kept port at a restart. */
+const LOWEST = 20_000;
+const HIGHEST = 32_000;
+
+/** What the demo made for itself: `serve` refuses secrets that begin so. */
+export const GENERATED = 'lampwright-demo-';
 
 function readJson(file) {
+  if (!existsSync(file)) return {};
   try {
     return JSON.parse(readFileSync(file, 'utf8'));
   } catch {
-    return {};
+    throw new Stop(`${file} is not readable as JSON. Mend it, or remove its folder to start afresh.`);
   }
 }
 
+/** Writes by rename: a file cut short would lose the database's passwords. */
 function writePrivate(file, value) {
   mkdirSync(dirname(file), { recursive: true, mode: 0o700 });
-  writeFileSync(file, `${JSON.stringify(value, null, 2)}\n`, { mode: 0o600 });
+  const fresh = `${file}.${process.pid}`;
+  writeFileSync(fresh, `${JSON.stringify(value, null, 2)}\n`, { mode: 0o600 });
+  renameSync(fresh, file);
 }
 
 /** Whether nothing listens on a loopback port. */
@@ -27,15 +38,12 @@ export function isFree(port) {
   });
 }
 
-export function anyFreePort() {
-  return new Promise((resolve, reject) => {
-    const server = createServer();
-    server.once('error', reject);
-    server.listen({ port: 0, host: '127.0.0.1' }, () => {
-      const { port } = server.address();
-      server.close(() => resolve(port));
-    });
-  });
+async function anyFreePort(taken) {
+  for (let tries = 0; tries < 500; tries += 1) {
+    const port = randomInt(LOWEST, HIGHEST);
+    if (!taken.includes(port) && (await isFree(port))) return port;
+  }
+  throw new Stop(`No free port between ${LOWEST} and ${HIGHEST}.`);
 }
 
 /**
@@ -47,9 +55,10 @@ export async function keptPorts(data, names, preferred = {}) {
   const kept = readJson(file);
   const ports = {};
   for (const name of names) {
+    const taken = Object.values(ports);
     const wish = kept[name] ?? preferred[name];
-    const usable = wish !== undefined && !Object.values(ports).includes(wish) && (await isFree(wish));
-    ports[name] = usable ? wish : await anyFreePort();
+    const usable = Number.isInteger(wish) && !taken.includes(wish) && (await isFree(wish));
+    ports[name] = usable ? wish : await anyFreePort([...taken, ...Object.values(kept)]);
     if (kept[name] !== undefined && kept[name] !== ports[name])
       say(`Port ${kept[name]} (${name}) is taken by another program; using ${ports[name]} from now on.`);
   }
@@ -57,11 +66,11 @@ export async function keptPorts(data, names, preferred = {}) {
   return ports;
 }
 
-/** Random secrets by name, made once. */
+/** Random secrets by name, made once and kept in `<data>/secrets.json`. */
 export function keptSecrets(data, names) {
   const file = join(data, 'secrets.json');
   const secrets = readJson(file);
-  for (const name of names) secrets[name] ??= randomBytes(24).toString('hex');
+  for (const name of names) secrets[name] ??= `${GENERATED}${randomBytes(24).toString('hex')}`;
   writePrivate(file, secrets);
   return secrets;
 }

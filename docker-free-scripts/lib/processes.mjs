@@ -1,132 +1,140 @@
-/** Child processes with pid files: all end with us, and what a kill -9 left behind is found by the next run. */
+/** Child processes that all end with us; what a kill -9 left behind is found by the next run. */
 import { spawn } from 'node:child_process';
-import { createWriteStream, existsSync, mkdirSync, readdirSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
+import { existsSync, mkdirSync, openSync, closeSync, readFileSync, renameSync, rmSync } from 'node:fs';
 import { join } from 'node:path';
-import { commandLine, environmentOf } from './lock.mjs';
-import { complain, ROOT, wait } from './paths.mjs';
+import { endLeftovers, endMarked, markOf, notePid } from './leftovers.mjs';
+import { complain, ROOT, Stop, wait } from './paths.mjs';
+import { endProcess } from './procfs.mjs';
 
-const alive = (pid) => {
-  const line = commandLine(pid);
-  return line !== null && line !== '';
-};
+const never = () => new Promise(() => {});
+const OUTPUT_KEPT = 400_000;
 
-/** Ends a process that we know is ours: asks, then insists. */
-export async function endProcess(pid, signal = 'SIGTERM', graceMs = 8_000) {
-  const send = (name) => {
-    try {
-      process.kill(pid, name);
-    } catch {
-      // It ended meanwhile, which is what is wanted.
-    }
-  };
-  send(signal);
-  for (let waited = 0; waited < graceMs && alive(pid); waited += 50) await wait(50);
-  if (alive(pid)) send('SIGKILL');
-  for (let waited = 0; waited < 2_000 && alive(pid); waited += 50) await wait(50);
+/** The last lines of a log, for a message. */
+function tail(file, lines = 20) {
+  return existsSync(file) ? readFileSync(file, 'utf8').trimEnd().split('\n').slice(-lines).join('\n') : '';
 }
 
 export class Children {
+  /** Called with the name of a service that ended though nobody asked it to. */
+  onUnexpectedExit = () => {};
+  running = [];
+  ending = false;
+
   constructor(data) {
     this.pids = join(data, 'pids');
     this.logs = join(data, 'logs');
-    this.running = [];
-    this.ending = false;
-    mkdirSync(this.pids, { recursive: true, mode: 0o700 });
-    mkdirSync(this.logs, { recursive: true, mode: 0o700 });
+    for (const folder of [this.pids, this.logs]) mkdirSync(folder, { recursive: true, mode: 0o700 });
   }
 
-  /**
-   * Ends children of an earlier run: the pid must still show the command line that was noted down, or the mark
-   * that we put into its environment (a server may rename itself).
-   */
-  async endLeftovers() {
-    for (const name of existsSync(this.pids) ? readdirSync(this.pids) : []) {
-      const file = join(this.pids, name);
-      const [pid = '', line = ''] = readFileSync(file, 'utf8').split('\n');
-      const same = line !== '' && commandLine(Number(pid)) === line;
-      const marked = environmentOf(Number(pid)).includes(this.mark(name.replace(/\.pid$/, '')));
-      if (same || marked) await endProcess(Number(pid));
-      rmSync(file, { force: true });
-    }
-  }
-
-  mark(name) {
-    return `LAMPWRIGHT_CHILD=${this.pids}/${name}`;
-  }
-
-  /** Starts a child whose output goes to a log file. `signal` is how it likes to be ended. */
-  start(name, command, args, { env = process.env, cwd = ROOT, signal = 'SIGTERM', onExit } = {}) {
-    const log = createWriteStream(join(this.logs, `${name}.log`), { flags: 'a', mode: 0o600 });
-    const marked = { ...env, LAMPWRIGHT_CHILD: `${this.pids}/${name}` };
-    const child = spawn(command, args, { env: marked, cwd, stdio: ['ignore', 'pipe', 'pipe'] });
-    child.stdout.pipe(log, { end: false });
-    child.stderr.pipe(log, { end: false });
-    const file = join(this.pids, `${name}.pid`);
-    const entry = { name, child, signal, file, gone: false };
-    // The command line settles once the program has been exec'd.
-    const note = () => {
-      if (child.pid && !entry.gone) writeFileSync(file, `${child.pid}\n${commandLine(child.pid) ?? ''}`, { mode: 0o600 });
-    };
-    note();
-    setTimeout(note, 300).unref();
-    child.on('error', (error) => complain(`${name}: ${error.message}`));
-    child.on('exit', (code, by) => {
-      entry.gone = true;
-      rmSync(file, { force: true });
-      if (!this.ending) onExit?.(code, by);
-    });
-    this.running.push(entry);
-    return child;
+  /** Ends what an earlier run of this data folder left behind. */
+  endLeftovers() {
+    return endLeftovers(this.pids);
   }
 
   logOf(name) {
     return join(this.logs, `${name}.log`);
   }
 
-  async end(name) {
-    const entry = this.running.find((one) => one.name === name && !one.gone);
-    if (!entry) return;
-    entry.gone = true;
-    await endProcess(entry.child.pid, entry.signal);
-    rmSync(entry.file, { force: true });
+  /**
+   * Each child leads a process group, so that a Ctrl-C at the terminal reaches us alone and we end them in order.
+   * One that asks at the terminal (sudo) has to stay in ours: `attached`.
+   */
+  #spawn(
+    name,
+    program,
+    args,
+    { env = process.env, cwd = ROOT, signal = 'SIGTERM', stdio, attached = false },
+  ) {
+    if (this.ending) throw new Stop('Ending.');
+    const marked = { ...env, LAMPWRIGHT_CHILD: markOf(this.pids, name) };
+    const child = spawn(program, args, { env: marked, cwd, stdio, detached: !attached });
+    const entry = { name, child, signal, ended: false };
+    entry.exit = new Promise((resolve) => {
+      child.once('error', (error) => resolve({ code: 127, error }));
+      child.once('close', (code) => resolve({ code: code ?? 1 }));
+      // Something that it left behind may hold its output open; that is not worth waiting for.
+      child.once('exit', (code) => setTimeout(resolve, 2_000, { code: code ?? 1 }).unref());
+    }).then((result) => {
+      entry.ended = true;
+      this.#forget(entry);
+      return result;
+    });
+    if (child.pid) notePid(this.pids, { name, pid: child.pid, signal });
+    // setpriv becomes the server after our note: note what it is called then.
+    setTimeout(() => {
+      if (child.pid && !entry.ended) notePid(this.pids, { name, pid: child.pid, signal });
+    }, 300).unref();
+    this.running.push(entry);
+    return entry;
   }
 
-  /** Ends all, last started first, so that nothing loses its database under it. */
+  #forget(entry) {
+    rmSync(join(this.pids, `${entry.name}.pid`), { force: true });
+    this.running = this.running.filter((one) => one !== entry);
+  }
+
+  /** Starts a service. Its output goes straight to its log, which outlives us; the previous log is kept as `.old`. */
+  start(name, program, args, options = {}) {
+    const log = this.logOf(name);
+    if (existsSync(log)) renameSync(log, `${log}.old`);
+    const file = openSync(log, 'a', 0o600);
+    const entry = this.#spawn(name, program, args, { ...options, stdio: ['ignore', file, file] });
+    closeSync(file);
+    void entry.exit.then(({ error }) => {
+      if (error) complain(`${name}: ${error.message}`);
+      if (!this.ending) this.onUnexpectedExit(name);
+    });
+    return entry;
+  }
+
+  /**
+   * Runs a program to its end. With `show`, what it says goes to the terminal, otherwise it is returned.
+   * Settles no more once everything is being ended: the caller has nothing left to do then.
+   * @returns `{code, output}`
+   */
+  async run(name, program, args, { show = false, ...options } = {}) {
+    const stdio = show ? 'inherit' : ['ignore', 'pipe', 'pipe'];
+    const { child, exit } = this.#spawn(name, program, args, { ...options, stdio });
+    let output = '';
+    for (const stream of [child.stdout, child.stderr])
+      stream?.setEncoding('utf8').on('data', (text) => (output = (output + text).slice(-OUTPUT_KEPT)));
+    const { code, error } = await exit;
+    if (this.ending) return never();
+    return { code, output: error ? `${output}${error.message}` : output };
+  }
+
+  /**
+   * Waits until `probe` answers true for a started service.
+   * @throws {Stop} with the reason and the end of its log when it does not, at once when the service has ended.
+   */
+  async ready(entry, label, probe, timeoutMs = 60_000) {
+    const deadline = Date.now() + timeoutMs;
+    let reason = 'it did not answer in time';
+    while (Date.now() < deadline) {
+      const answer = await probe().catch((error) => error);
+      if (this.ending) return never();
+      if (answer === true) return;
+      if (answer instanceof Error) reason = answer.message;
+      if (entry.ended) {
+        reason = 'it ended';
+        break;
+      }
+      await wait(100);
+    }
+    throw new Stop(`${label} did not get ready: ${reason}.\n${tail(this.logOf(entry.name))}`);
+  }
+
+  /** Ends all, last started first, so that nothing loses its database under it, and then what they started. */
   async endAll() {
     this.ending = true;
-    for (const entry of [...this.running].reverse()) {
-      if (!entry.gone && entry.child.pid) await endProcess(entry.child.pid, entry.signal);
-      rmSync(entry.file, { force: true });
-    }
+    for (const { child, signal } of [...this.running].reverse())
+      if (child.pid) await endProcess(child.pid, signal);
+    await endMarked(this.pids);
   }
 }
 
-/** Calls `end` once on SIGINT, SIGTERM, SIGHUP, and when the parent that started us is gone. */
-export function onEnd(end) {
-  let ended = false;
-  const once = (code) => {
-    if (ended) return;
-    ended = true;
-    void end(code);
-  };
-  for (const [signal, code] of [['SIGINT', 130], ['SIGTERM', 143], ['SIGHUP', 129]]) process.on(signal, () => once(code));
-  const parent = process.ppid;
-  const watch = setInterval(() => {
-    if (process.ppid !== parent) once(129);
-  }, 1_000);
-  watch.unref();
-}
-
-/** Waits until `probe` answers true. @throws with the log's end when it does not. */
-export async function untilReady(name, probe, { log, timeoutMs = 60_000, alive: stillAlive = () => true } = {}) {
-  const deadline = Date.now() + timeoutMs;
-  while (Date.now() < deadline) {
-    if (await probe().catch(() => false)) return;
-    if (!stillAlive()) break;
-    await wait(150);
-  }
-  const tail = log && existsSync(log) ? readFileSync(log, 'utf8').split('\n').slice(-15).join('\n') : '';
-  throw new Error(`${name} did not get ready.\n${tail}`);
-}
-
-export const httpProbe = (url) => async () => (await fetch(url, { signal: AbortSignal.timeout(2_000) })).ok;
+export const httpProbe = (url) => async () => {
+  const response = await fetch(url, { signal: AbortSignal.timeout(2_000) });
+  if (!response.ok) throw new Error(`it answers ${response.status}`);
+  return true;
+};

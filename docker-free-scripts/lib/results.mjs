@@ -1,5 +1,8 @@
 /** Counting what the test runners report, and printing failures readably. */
 import { existsSync, readFileSync } from 'node:fs';
+import { stripVTControlCharacters } from 'node:util';
+
+const DETAIL_SHOWN = 4_000;
 
 export class Tally {
   passed = 0;
@@ -7,18 +10,27 @@ export class Tally {
   skipped = 0;
   failures = [];
 
-  pass(count = 1) {
-    this.passed += count;
+  pass() {
+    this.passed += 1;
   }
 
   fail(name, detail = '') {
     this.failed += 1;
-    this.failures.push({ name, detail });
+    this.failures.push({ name, detail: stripVTControlCharacters(detail).trim() });
+  }
+
+  /** The failures for a person: the end of a long message says more than its beginning only for logs, so keep both. */
+  story() {
+    const shorten = (text) =>
+      text.length <= DETAIL_SHOWN
+        ? text
+        : `${text.slice(0, DETAIL_SHOWN / 2)}\n  […]\n${text.slice(-DETAIL_SHOWN / 2)}`;
+    return this.failures.map(({ name, detail }) => `\nFAILED ${name}\n${shorten(detail)}`).join('\n');
   }
 
   /** The one plain line that ends a test run. */
   line() {
-    return `${this.passed} passed, ${this.failed} failed${this.skipped > 0 ? `, ${this.skipped} skipped` : ''}`;
+    return `${this.passed} passed, ${this.failed} failed`;
   }
 }
 
@@ -26,43 +38,55 @@ function read(file) {
   return existsSync(file) ? JSON.parse(readFileSync(file, 'utf8')) : null;
 }
 
-/** Vitest's JSON report: each test counts, and so does a file that could not be loaded. */
-export function addVitest(tally, file, name, exitCode) {
+/** Counts one runner's report; a runner that ended badly is a failure even where no test of it was. */
+function count(tally, runner, { file, code, output }, add) {
+  const before = tally.failed;
   const report = read(file);
-  if (!report) return tally.fail(name, 'The runner wrote no report.');
-  for (const suite of report.testResults) {
-    const tests = suite.assertionResults;
-    for (const test of tests) {
-      if (test.status === 'passed') tally.pass();
-      else if (test.status === 'failed') tally.fail(`${name}: ${test.fullName}`, test.failureMessages.join('\n'));
-      else tally.skipped += 1;
-    }
-    if (suite.status === 'failed' && !tests.some((test) => test.status === 'failed'))
-      tally.fail(`${name}: ${suite.name}`, suite.message);
-  }
-  if (exitCode !== 0 && tally.failed === 0) tally.fail(name, `The runner ended with ${exitCode}.`);
+  if (report) add(report);
+  if (tally.failed > before || (report && code === 0)) return;
+  tally.fail(
+    runner,
+    `${report ? `The runner ended with ${code}.` : 'The runner wrote no report.'}\n${output}`,
+  );
 }
 
-function* playwrightSpecs(suites, path = []) {
+/** Vitest's JSON report: each test counts, and so does a file that could not be loaded. */
+export function addVitest(tally, runner, run) {
+  count(tally, runner, run, (report) => {
+    for (const file of report.testResults) {
+      const tests = file.assertionResults;
+      for (const test of tests) {
+        if (test.status === 'passed') tally.pass();
+        else if (test.status === 'failed')
+          tally.fail(`${runner}: ${file.name} › ${test.fullName}`, test.failureMessages.join('\n'));
+        else tally.skipped += 1;
+      }
+      if (file.status === 'failed' && !tests.some((test) => test.status === 'failed'))
+        tally.fail(`${runner}: ${file.name}`, file.message);
+    }
+  });
+}
+
+function* specsOf(suites, path = []) {
   for (const suite of suites ?? []) {
     const here = [...path, suite.title];
-    for (const spec of suite.specs ?? []) yield { spec, title: [...here, spec.title].filter(Boolean).join(' › ') };
-    yield* playwrightSpecs(suite.suites, here);
+    for (const spec of suite.specs ?? [])
+      yield { spec, title: [...here, spec.title].filter(Boolean).join(' › ') };
+    yield* specsOf(suite.suites, here);
   }
 }
 
-/** Playwright's JSON report: a spec counts once for each project it ran in. */
-export function addPlaywright(tally, file, name, exitCode) {
-  const report = read(file);
-  if (!report) return tally.fail(name, 'The runner wrote no report.');
-  for (const { spec, title } of playwrightSpecs(report.suites)) {
-    for (const test of spec.tests) {
-      const errors = test.results.flatMap((result) => result.errors.map((error) => error.message));
-      if (test.status === 'skipped') tally.skipped += 1;
-      else if (test.status === 'expected') tally.pass();
-      else tally.fail(`${name}: ${title} (${test.projectName}, ${test.status})`, errors.join('\n'));
+/** Playwright's JSON report: a spec counts once for each project it ran in; one that passed at the second try failed. */
+export function addPlaywright(tally, runner, run) {
+  count(tally, runner, run, (report) => {
+    for (const { spec, title } of specsOf(report.suites)) {
+      for (const test of spec.tests) {
+        const errors = test.results.flatMap((result) => result.errors.map((error) => error.message));
+        if (test.status === 'expected') tally.pass();
+        else if (test.status === 'skipped') tally.skipped += 1;
+        else tally.fail(`${runner}: ${title} (${test.projectName}, ${test.status})`, errors.join('\n'));
+      }
     }
-  }
-  for (const error of report.errors ?? []) tally.fail(name, error.message);
-  if (exitCode !== 0 && tally.failed === 0) tally.fail(name, `The runner ended with ${exitCode}.`);
+    for (const error of report.errors ?? []) tally.fail(runner, error.message);
+  });
 }

@@ -4,11 +4,19 @@ import { connect } from 'node:net';
 import { join } from 'node:path';
 import { keptPorts, keptSecrets } from './ports.mjs';
 import { ROOT, script } from './paths.mjs';
-import { httpProbe, untilReady } from './processes.mjs';
+import { httpProbe } from './processes.mjs';
 import { startPostgres } from './postgres.mjs';
 
 const SECRETS = [
-  'db_postgres', 'db_migrator', 'db_web', 'db_worker', 'nextauth', 'link', 'audit', 'stripe_webhook', 'stripe_key',
+  'db_postgres',
+  'db_migrator',
+  'db_web',
+  'db_worker',
+  'nextauth',
+  'link',
+  'audit',
+  'stripe_webhook',
+  'stripe_key',
 ];
 
 const tcpProbe = (port) => () =>
@@ -23,10 +31,10 @@ const tcpProbe = (port) => () =>
 
 async function startMail(children, ports) {
   const maildev = join(ROOT, 'node_modules', 'maildev', 'dist', 'bin', 'maildev.js');
-  children.start('maildev', process.execPath, [
-    maildev, '--ip', '127.0.0.1', '-s', String(ports.smtp), '--web-ip', '127.0.0.1', '-w', String(ports.mail),
-  ]);
-  await untilReady('The mail catcher', httpProbe(`http://127.0.0.1:${ports.mail}/api/healthz`), { log: children.logOf('maildev') });
+  const smtp = ['--ip', '127.0.0.1', '-s', String(ports.smtp)];
+  const web = ['--web-ip', '127.0.0.1', '-w', String(ports.mail)];
+  const catcher = children.start('maildev', process.execPath, [maildev, ...smtp, ...web]);
+  await children.ready(catcher, 'The mail catcher', httpProbe(`http://127.0.0.1:${ports.mail}/api/healthz`));
   return { SMTP_URL: `smtp://127.0.0.1:${ports.smtp}`, MAIL_CATCHER_URL: `http://127.0.0.1:${ports.mail}` };
 }
 
@@ -39,8 +47,8 @@ async function startStripe(children, { ports, secrets, data, appUrl }) {
     STRIPE_FAKE_SECRET_KEY: `sk_test_${secrets.stripe_key}`,
     STRIPE_FAKE_DATA: join(data, 'stripe'),
   };
-  children.start('stripe-fake', process.execPath, [script('stripe-fake.mjs')], { env });
-  await untilReady('The card stand-in', httpProbe(`http://127.0.0.1:${ports.stripe}/healthz`), { log: children.logOf('stripe-fake') });
+  const fake = children.start('stripe-fake', process.execPath, [script('stripe-fake.mjs')], { env });
+  await children.ready(fake, 'The card stand-in', httpProbe(`http://127.0.0.1:${ports.stripe}/healthz`));
   return {
     STRIPE_SECRET_KEY: env.STRIPE_FAKE_SECRET_KEY,
     STRIPE_WEBHOOK_SECRET: env.STRIPE_FAKE_WEBHOOK_SECRET,
@@ -52,8 +60,8 @@ async function startObjectStore(children, { ports, data }) {
   const folder = join(data, 'objects');
   mkdirSync(folder, { recursive: true, mode: 0o700 });
   const env = { ...process.env, OBJECT_STORE_PORT: String(ports.objects), OBJECT_STORE_DIR: folder };
-  children.start('object-store', process.execPath, [script('object-store.mjs')], { env });
-  await untilReady('The object store', tcpProbe(ports.objects), { log: children.logOf('object-store') });
+  const store = children.start('object-store', process.execPath, [script('object-store.mjs')], { env });
+  await children.ready(store, 'The object store', tcpProbe(ports.objects));
   // The stand-in's own published test credentials.
   return {
     S3_ENDPOINT: `http://127.0.0.1:${ports.objects}`,
@@ -66,8 +74,8 @@ async function startObjectStore(children, { ports, data }) {
 }
 
 /** A set address means the real service: then no stand-in. */
-export const usesRealServices = (env = process.env) =>
-  ['DATABASE_URL', 'SMTP_URL', 'S3_ENDPOINT', 'STRIPE_SECRET_KEY'].filter((name) => env[name]);
+const realServices = () =>
+  ['DATABASE_URL', 'SMTP_URL', 'S3_ENDPOINT', 'STRIPE_SECRET_KEY'].filter((name) => process.env[name]);
 
 function realDatabase() {
   const url = process.env.DATABASE_URL;
@@ -79,22 +87,20 @@ function realDatabase() {
 }
 
 /**
- * Starts what is missing and returns the application's environment.
+ * Starts what the environment does not name and returns the application's environment.
  * @param preferred first choices of ports, e.g. `{app: 3000}`
  */
 export async function startServices(children, { data, durable = true, preferred = {} }) {
-  mkdirSync(data, { recursive: true, mode: 0o700 });
-  await children.endLeftovers();
   const ports = await keptPorts(data, ['app', 'postgres', 'smtp', 'mail', 'stripe', 'objects'], preferred);
   const secrets = keptSecrets(data, SECRETS);
   const appUrl = process.env.APP_URL ?? `http://127.0.0.1:${ports.app}`;
-  const real = usesRealServices();
+  const real = realServices();
   const env = {
     APP_URL: appUrl,
     NEXTAUTH_URL: appUrl,
-    NEXTAUTH_SECRET: secrets.nextauth,
-    LINK_SECRET: secrets.link,
-    AUDIT_SECRET: secrets.audit,
+    NEXTAUTH_SECRET: process.env.NEXTAUTH_SECRET ?? secrets.nextauth,
+    LINK_SECRET: process.env.LINK_SECRET ?? secrets.link,
+    AUDIT_SECRET: process.env.AUDIT_SECRET ?? secrets.audit,
     LAMPWRIGHT_DEMO: real.length === 0 ? '1' : '0',
     NEXT_TELEMETRY_DISABLED: '1',
   };
