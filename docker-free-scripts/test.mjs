@@ -65,7 +65,7 @@ async function test(children) {
   if (tally.passed + tally.failed === 0) tally.fail('test run', 'No test was found.');
   say(tally.story());
   if (tally.skipped > 0) say(`(${tally.skipped} skipped)`);
-  say(tally.line());
+  say(`\n${tally.line()}`);
   return tally.failed > 0 ? 1 : 0;
 }
 

@@ -53,6 +53,7 @@ async function anyFreePort(taken) {
 export async function keptPorts(data, names, preferred = {}) {
   const file = join(data, 'ports.json');
   const kept = readJson(file);
+  /** @type {Record<string, number>} */
   const ports = {};
   for (const name of names) {
     const taken = Object.values(ports);

@@ -14,7 +14,7 @@ import {
 import { basename, dirname, join } from 'node:path';
 import { isRoot, postgresBin } from './debian.mjs';
 import { Stop } from './paths.mjs';
-import { commandLine, endProcess } from './procfs.mjs';
+import { argumentsOf, endProcess } from './procfs.mjs';
 
 const ROLES = ['migrator', 'web', 'worker'];
 const DATABASE = 'lampwright';
@@ -90,9 +90,8 @@ export async function endServerOf(folder) {
   const file = join(folder, 'postmaster.pid');
   if (!existsSync(file)) return;
   const pid = Number(readFileSync(file, 'utf8').split('\n')[0]);
-  const words = commandLine(pid)?.split(' ') ?? [];
   // SIGINT is PostgreSQL's fast shutdown: it does not wait for clients.
-  if (words.includes(folder)) await endProcess(pid, 'SIGINT');
+  if (argumentsOf(pid)?.includes(folder)) await endProcess(pid, 'SIGINT');
 }
 
 /** The installed server that fits the data folder, which another major version can't read. */

@@ -19,6 +19,8 @@ export class Children {
   onUnexpectedExit = () => {};
   running = [];
   ending = false;
+  /** How long each may take to end by itself. */
+  graceMs = 8_000;
 
   constructor(data) {
     this.pids = join(data, 'pids');
@@ -48,16 +50,16 @@ export class Children {
     if (this.ending) throw new Stop('Ending.');
     const marked = { ...env, LAMPWRIGHT_CHILD: markOf(this.pids, name) };
     const child = spawn(program, args, { env: marked, cwd, stdio, detached: !attached });
-    const entry = { name, child, signal, ended: false };
-    entry.exit = new Promise((resolve) => {
+    const exit = new Promise((resolve) => {
       child.once('error', (error) => resolve({ code: 127, error }));
       child.once('close', (code) => resolve({ code: code ?? 1 }));
       // Something that it left behind may hold its output open; that is not worth waiting for.
       child.once('exit', (code) => setTimeout(resolve, 2_000, { code: code ?? 1 }).unref());
-    }).then((result) => {
+    });
+    const entry = { name, child, signal, exit, ended: false };
+    void exit.then(() => {
       entry.ended = true;
       this.#forget(entry);
-      return result;
     });
     if (child.pid) notePid(this.pids, { name, pid: child.pid, signal });
     // setpriv becomes the server after our note: note what it is called then.
@@ -128,7 +130,7 @@ export class Children {
   async endAll() {
     this.ending = true;
     for (const { child, signal } of [...this.running].reverse())
-      if (child.pid) await endProcess(child.pid, signal);
+      if (child.pid) await endProcess(child.pid, signal, this.graceMs);
     await endMarked(this.pids);
   }
 }

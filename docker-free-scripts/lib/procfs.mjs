@@ -2,23 +2,22 @@
 import { readdirSync, readFileSync, readlinkSync } from 'node:fs';
 import { wait } from './paths.mjs';
 
-/** The command line of a running process; '' once it has ended but is not reaped; null where there is none. */
-export function commandLine(pid) {
+const wordsOf = (file) => {
   try {
-    return readFileSync(`/proc/${pid}/cmdline`, 'utf8').replaceAll('\0', ' ').trim();
+    return readFileSync(file, 'utf8').split('\0');
   } catch {
     return null;
   }
-}
+};
+
+/** The words of a running process's command line, null where there is no such process. */
+export const argumentsOf = (pid) => wordsOf(`/proc/${pid}/cmdline`);
+
+/** The command line as one text; '' once the process has ended but is not reaped; null where there is none. */
+export const commandLine = (pid) => argumentsOf(pid)?.join(' ').trim() ?? null;
 
 /** A process's environment as `NAME=value` entries, empty where it is gone or not ours to read. */
-export function environmentOf(pid) {
-  try {
-    return readFileSync(`/proc/${pid}/environ`, 'utf8').split('\0');
-  } catch {
-    return [];
-  }
-}
+export const environmentOf = (pid) => wordsOf(`/proc/${pid}/environ`) ?? [];
 
 export function workingFolder(pid) {
   try {
