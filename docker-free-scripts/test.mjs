@@ -63,7 +63,7 @@ async function test(children) {
     tally.fail('test run', error instanceof Stop ? error.message : (error.stack ?? String(error)));
   }
   if (tally.passed + tally.failed === 0) tally.fail('test run', 'No test was found.');
-  say(tally.story());
+  if (tally.failed > 0) say(tally.story());
   if (tally.skipped > 0) say(`(${tally.skipped} skipped)`);
   say(`\n${tally.line()}`);
   return tally.failed > 0 ? 1 : 0;
