@@ -33,21 +33,29 @@ file=/etc/postgresql-common/createcluster.conf
 mkdir -p /etc/postgresql-common
 grep -qs '^create_main_cluster *= *false' "$file" || echo 'create_main_cluster = false' >> "$file"`;
 
-/** Attached to the terminal: sudo may ask for a password there. */
+/** sudo may ask for a password at the terminal. */
 function asRoot(children, program, args) {
   const env = { ...process.env, DEBIAN_FRONTEND: 'noninteractive' };
   const [command, rest] = isRoot()
     ? [program, args]
     : ['sudo', ['DEBIAN_FRONTEND=noninteractive', program, ...args]];
-  return children.run('apt', command, rest, { show: true, attached: true, env });
+  return children.run('apt', command, rest, { ask: true, env });
 }
 
 async function install(children, name) {
+  const said = [];
   for (const wanted of WANTED[name].packages) {
-    await asRoot(children, 'apt-get', ['install', '-y', '-qq', '--no-install-recommends', wanted]);
+    const { output } = await asRoot(children, 'apt-get', [
+      'install',
+      '-y',
+      '-q',
+      '--no-install-recommends',
+      wanted,
+    ]);
     if (WANTED[name].present()) return;
+    said.push(output);
   }
-  throw new Stop(`apt-get could not install ${name}; what it said stands above.`);
+  throw new Stop(`apt-get could not install ${name}.\n${said.join('\n')}`);
 }
 
 export async function ensureDebianPackages(children, names) {

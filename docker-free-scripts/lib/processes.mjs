@@ -90,13 +90,15 @@ export class Children {
   }
 
   /**
-   * Runs a program to its end. With `show`, what it says goes to the terminal, otherwise it is returned.
+   * Runs a program to its end. What it says is returned, or, with `show`, goes to the terminal; `ask` leaves it the
+   * terminal for questions and complaints only.
    * Settles no more once everything is being ended: the caller has nothing left to do then.
    * @returns `{code, output}`
    */
-  async run(name, program, args, { show = false, ...options } = {}) {
-    const stdio = show ? 'inherit' : ['ignore', 'pipe', 'pipe'];
-    const { child, exit } = this.#spawn(name, program, args, { ...options, stdio });
+  async run(name, program, args, { show = false, ask = false, ...options } = {}) {
+    const [input, errors] = ask ? ['inherit', 'inherit'] : ['ignore', 'pipe'];
+    const stdio = show ? 'inherit' : [input, 'pipe', errors];
+    const { child, exit } = this.#spawn(name, program, args, { ...options, attached: ask, stdio });
     let output = '';
     for (const stream of [child.stdout, child.stderr])
       stream?.setEncoding('utf8').on('data', (text) => (output = (output + text).slice(-OUTPUT_KEPT)));

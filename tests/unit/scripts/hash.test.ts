@@ -3,8 +3,7 @@ import { join } from 'node:path';
 import { describe, expect, it } from 'vitest';
 import { sourceHash, withoutServices } from '../../../docker-free-scripts/lib/build.mjs';
 import { ensurePackages, packagesAreCurrent } from '../../../docker-free-scripts/lib/packages.mjs';
-import { Children } from '../../../docker-free-scripts/lib/processes.mjs';
-import { LIB, ownFolder, startModule } from './support/child';
+import { LIB, ownChildren, ownFolder, startModule } from './support/child';
 
 function project(): string {
   const root = ownFolder();
@@ -61,7 +60,7 @@ describe('the environment of a build', () => {
 describe('packages', () => {
   it('are installed by the real npm when the lock file changed, and only then', async () => {
     const root = project();
-    const children = new Children(join(root, '.data'));
+    const children = ownChildren(join(root, '.data'));
     expect(packagesAreCurrent(root)).toBe(false);
     await ensurePackages(children, root);
     expect(packagesAreCurrent(root)).toBe(true);
@@ -83,7 +82,7 @@ describe('packages', () => {
       takeLock(${JSON.stringify(join(root, file))});
       console.log('held');
       setInterval(() => {}, 1000);`);
-    const children = new Children(join(root, '.data'));
+    const children = ownChildren(join(root, '.data'));
     await expect(ensurePackages(children, root)).rejects.toMatchObject({
       code: 3,
       message: expect.stringMatching(message),

@@ -5,9 +5,11 @@ import { tmpdir } from 'node:os';
 import { join, resolve } from 'node:path';
 import { pathToFileURL } from 'node:url';
 import { afterEach } from 'vitest';
+import { Children } from '../../../../docker-free-scripts/lib/processes.mjs';
 
 const started: ChildProcess[] = [];
 const folders: string[] = [];
+const families: Children[] = [];
 
 export const LIB = pathToFileURL(resolve('docker-free-scripts/lib')).href;
 
@@ -16,6 +18,13 @@ export function ownFolder(): string {
   const folder = mkdtempSync(join(tmpdir(), 'lampwright scripts-'));
   folders.push(folder);
   return folder;
+}
+
+/** Children in a data folder of this test's own, ended with it. */
+export function ownChildren(data = ownFolder()): Children {
+  const children = new Children(data);
+  families.push(children);
+  return children;
 }
 
 /** Starts node and resolves with it once it has printed its first line. */
@@ -52,9 +61,13 @@ export async function until(what: string, probe: () => boolean, ms = 5_000): Pro
 }
 
 afterEach(async () => {
+  // Asked first: a command that is killed would leave its own children behind.
   for (const child of started.splice(0)) {
-    child.kill('SIGKILL');
+    child.kill('SIGTERM');
+    const insist = setTimeout(() => child.kill('SIGKILL'), 3_000);
     await exitOf(child);
+    clearTimeout(insist);
   }
+  for (const children of families.splice(0)) await children.endAll();
   for (const folder of folders.splice(0)) rmSync(folder, { recursive: true, force: true });
 });
