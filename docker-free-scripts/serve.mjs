@@ -42,7 +42,7 @@ export function refusals(env) {
 }
 
 /** Whether the demo was ever seeded into this database. */
-async function holdsDemoPeople(url) {
+export async function holdsDemoPeople(url) {
   const { default: pg } = await import('pg');
   const client = new pg.Client({ connectionString: url });
   await client.connect();

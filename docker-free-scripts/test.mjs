@@ -41,7 +41,7 @@ async function runParts(children, tally, { parts, files }) {
   mkdirSync(REPORTS, { recursive: true });
   const wants = (part) => parts.includes(part);
   const vitest = (project, env) => runVitest(children, tally, { project, env, files, reports: REPORTS });
-  if (wants('static')) await staticChecks(children, tally);
+  if (wants('static')) await staticChecks(children, tally, DATA);
   if (wants('pure')) await vitest('pure', process.env);
   if (!wants('integration') && !wants('e2e')) return;
   const services = await freshServices(children);

@@ -81,7 +81,10 @@ export function addPlaywright(tally, runner, run) {
   count(tally, runner, run, (report) => {
     for (const { spec, title } of specsOf(report.suites)) {
       for (const test of spec.tests) {
-        const errors = test.results.flatMap((result) => result.errors.map((error) => error.message));
+        const errors = test.results.flatMap(({ errors, attachments = [] }) => [
+          ...errors.map((error) => error.message),
+          ...attachments.filter(({ path }) => path).map(({ name, path }) => `${name}: ${path}`),
+        ]);
         if (test.status === 'expected') tally.pass();
         else if (test.status === 'skipped') tally.skipped += 1;
         else tally.fail(`${runner}: ${title} (${test.projectName}, ${test.status})`, errors.join('\n'));

@@ -63,7 +63,8 @@ function playwrightReport(
   tests: { status: string; projectName: string }[],
   errors: { message: string }[] = [],
 ) {
-  const results = [{ errors: [{ message: '\u001b[31mExpected 1\u001b[39m' }] }];
+  const attachments = [{ name: 'trace', path: '/kept/trace.zip' }, { name: 'inline' }];
+  const results = [{ errors: [{ message: '\u001b[31mExpected 1\u001b[39m' }], attachments }];
   const specs = [{ title: 'pays', tests: tests.map((test) => ({ ...test, results })) }];
   const file = join(ownFolder(), 'e2e.json');
   writeFileSync(
@@ -89,7 +90,7 @@ describe('playwright’s report', () => {
     expect(tally.line()).toBe('1 passed, 2 failed');
     expect(tally.skipped).toBe(1);
     expect(tally.story()).toContain(
-      'FAILED e2e: money.spec.ts › deposit › pays (phone, unexpected)\nExpected 1',
+      'FAILED e2e: money.spec.ts › deposit › pays (phone, unexpected)\nExpected 1\ntrace: /kept/trace.zip\n',
     );
   });
 
