@@ -132,17 +132,8 @@ export default defineConfig([
         {
           patterns: [
             {
-              group: [
-                'stripe',
-                'nodemailer',
-                'pg',
-                'pg-boss',
-                'sequelize',
-                '@aws-sdk/*',
-                'sharp',
-                'next-auth',
-                '!next-auth/react',
-              ],
+              regex:
+                '^(stripe|nodemailer|pg|pg-boss|sequelize|@aws-sdk/.*|sharp|next-auth(?!/react$)(/.*)?)$',
               message: 'SDKs stay behind lib/platform.',
             },
           ],

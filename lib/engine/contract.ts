@@ -105,7 +105,9 @@ export function refuse(path: string, message: string): never {
 }
 
 /** Keeps a calculation's input type tied to its schema. */
-export function defineCalculation<S extends z.ZodMiniType, R>(calculation: Calculation<S, R>): Calculation<S, R> {
+export function defineCalculation<S extends z.ZodMiniType, R>(
+  calculation: Calculation<S, R>,
+): Calculation<S, R> {
   return calculation;
 }
 

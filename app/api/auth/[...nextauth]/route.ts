@@ -1,0 +1,1 @@
+export { handleAuth as GET, handleAuth as POST } from '@/lib/platform/auth/handler';

@@ -1,0 +1,37 @@
+'use client';
+import Link from 'next/link';
+import { usePathname } from 'next/navigation';
+import { PlateFace } from '@/components/ui/plate';
+
+export interface NavItem {
+  href: string;
+  label: string;
+}
+
+/** Navigation as a row of legend plates, each with a pilot lamp that is lit where you are. */
+export function PlateNav({ items }: { items: NavItem[] }) {
+  const path = usePathname();
+  const best = items
+    .filter((item) => path === item.href || path.startsWith(`${item.href}/`))
+    .sort((a, b) => b.href.length - a.href.length)[0];
+  return (
+    <nav aria-label="Main" className="min-w-0">
+      <ul className="flex flex-wrap items-end gap-x-2 gap-y-2 sm:gap-x-3">
+        {items.map((item) => {
+          const lit = item === best;
+          return (
+            <li key={item.href}>
+              <Link
+                href={item.href}
+                aria-current={lit ? 'page' : undefined}
+                className="flex min-h-touch items-end no-underline"
+              >
+                <PlateFace lit={lit}>{item.label}</PlateFace>
+              </Link>
+            </li>
+          );
+        })}
+      </ul>
+    </nav>
+  );
+}
