@@ -1,0 +1,20 @@
+/** Where a job stands: the devices of the job line and what the open one waits for. */
+export const jobs = {
+  'job.step.survey': 'Survey',
+  'job.step.quote': 'Quote',
+  'job.step.deposit': 'Deposit',
+  'job.step.install': 'Install',
+  'job.step.closeout': 'Closeout',
+  'job.step.paid': 'Paid',
+  'job.wait.survey-not-finished': 'survey not finished',
+  'job.wait.stops-to-clear': 'stops to clear',
+  'job.wait.quote-not-sent': 'quote not sent',
+  'job.wait.quote-waits-for-answer': 'waits for the customer',
+  'job.wait.deposit-open': 'deposit not paid',
+  'job.wait.no-visit-yet': 'no visit yet',
+  'job.wait.sheet-not-released': 'wiring sheet not released',
+  'job.wait.sheet-not-signed-off': 'crew at work',
+  'job.wait.final-invoice-not-sent': 'final invoice not sent',
+  'job.wait.balance-open': 'balance not paid',
+  'job.wait.job-not-closed': 'ready to close',
+} as const;

@@ -1,0 +1,75 @@
+/** Money: integer minor units with a currency. Formatting and parsing in one place. */
+import type { ShopSettings } from './settings';
+
+/** Minor-unit digits by ISO 4217 for the currencies offered. */
+const DIGITS: Readonly<Record<string, number>> = {
+  USD: 2,
+  CAD: 2,
+  GBP: 2,
+  EUR: 2,
+  AUD: 2,
+  NZD: 2,
+  CHF: 2,
+  SEK: 2,
+  NOK: 2,
+  DKK: 2,
+  JPY: 0,
+  KRW: 0,
+  KWD: 3,
+  BHD: 3,
+};
+
+export const CURRENCY_CODES = Object.keys(DIGITS);
+
+/** @returns how many digits the minor unit has, or null for a currency that is not known here. */
+export function minorDigits(currency: string): number | null {
+  return DIGITS[currency] ?? null;
+}
+
+type MoneySettings = Pick<ShopSettings, 'currency' | 'locale'>;
+
+/** "1,234.50" or, with `symbol`, "$1,234.50". Exact for any integer that a bigint column holds. */
+export function formatMoney(
+  minor: number | bigint | string,
+  settings: MoneySettings,
+  { symbol = true }: { symbol?: boolean } = {},
+): string {
+  const digits = minorDigits(settings.currency) ?? 2;
+  const whole = BigInt(minor);
+  const text = (whole < 0n ? -whole : whole).toString().padStart(digits + 1, '0');
+  const units = digits === 0 ? text : text.slice(0, -digits);
+  const grouped = units.replace(/\B(?=(\d{3})+(?!\d))/g, ',');
+  const amount = digits === 0 ? grouped : `${grouped}.${text.slice(-digits)}`;
+  const sign = whole < 0n ? '−' : '';
+  return `${sign}${symbol ? currencySymbol(settings) : ''}${amount}`;
+}
+
+function currencySymbol({ currency, locale }: MoneySettings): string {
+  const parts = new Intl.NumberFormat(locale, { style: 'currency', currency }).formatToParts(0);
+  const symbol = parts.find((part) => part.type === 'currency')?.value ?? currency;
+  return /[A-Za-z]$/.test(symbol) ? `${symbol}\u00a0` : symbol;
+}
+
+export type Parsed<T> = { ok: true; value: T } | { ok: false; message: string };
+
+/** Reads "1,234.50" or "$1234.5" as integer minor units. More digits than the currency has are refused. */
+export function parseMoney(text: string, settings: MoneySettings): Parsed<bigint> {
+  const digits = minorDigits(settings.currency) ?? 2;
+  const clean = text.replace(/[\s,$£€¥]/g, '');
+  const match = /^(-|−)?(\d{1,13})(?:\.(\d*))?$/.exec(clean);
+  if (!match) return { ok: false, message: 'Type an amount such as 1,234.50.' };
+  const [, sign, units = '0', decimals = ''] = match;
+  if (decimals.length > digits)
+    return { ok: false, message: `At most ${digits} digits after the point in ${settings.currency}.` };
+  const value = BigInt(units + decimals.padEnd(digits, '0'));
+  return { ok: true, value: sign ? -value : value };
+}
+
+/** Integer minor units as a plain decimal string in currency units: "1234.50". */
+export function minorToDecimal(minor: number | bigint | string, currency: string): string {
+  const digits = minorDigits(currency) ?? 2;
+  const whole = BigInt(minor);
+  const text = (whole < 0n ? -whole : whole).toString().padStart(digits + 1, '0');
+  const sign = whole < 0n ? '-' : '';
+  return digits === 0 ? `${sign}${text}` : `${sign}${text.slice(0, -digits)}.${text.slice(-digits)}`;
+}
