@@ -1,0 +1,189 @@
+/** A tape's sources and feeds as a circuit: who shares a source, in what order they join, what zero ohms tie. */
+import { atLeast, atMost, EngineError, refuse } from '@/lib/engine/contract';
+
+export interface TapeFeed {
+  /** Boundary, 0 (start) to cuts (end). */
+  at: number;
+  volts: number;
+  positiveOhms: number;
+  negativeOhms: number;
+  source?: string | undefined;
+  sourceOhms?: number | undefined;
+}
+
+export interface Rails {
+  cuts: number;
+  cutMetres: number;
+  railOhmsPerMetre: { positive: number; negative: number };
+}
+
+/** Feeds behind one source. */
+export interface Source {
+  volts: number;
+  ohms: number;
+  /** Indices of its feeds as given. */
+  feeds: number[];
+}
+
+const same = (a: number, b: number) => atMost(a, b) && atLeast(a, b);
+
+function ownOhms(feeds: readonly TapeFeed[], members: readonly number[], common: number | undefined): number {
+  let ohms = common;
+  for (const index of members) {
+    const own = feeds[index]?.sourceOhms;
+    if (own === undefined) continue;
+    if (ohms !== undefined && !same(ohms, own)) {
+      refuse(`feeds.${index}.sourceOhms`, 'differs from the sourceOhms of the same source: it has one');
+    }
+    ohms = own;
+  }
+  return ohms ?? 0;
+}
+
+/**
+ * Feeds with the same source name (and volts) stand behind one source; a feed without a name joins the first source
+ * of its volts. The source of the first feed has the tape's common sourceOhms, any other its feeds' own; 0 unless given.
+ */
+export function sourcesOf(feeds: readonly TapeFeed[], sourceOhms: number | undefined): Source[] {
+  const groups: { name: string | undefined; volts: number; feeds: number[] }[] = [];
+  const join = (index: number, { source, volts }: TapeFeed) => {
+    const group = groups.find((g) => same(g.volts, volts) && (source === undefined || g.name === source));
+    if (group) group.feeds.push(index);
+    else groups.push({ name: source, volts, feeds: [index] });
+  };
+  feeds.forEach((feed, index) => feed.source !== undefined && join(index, feed));
+  feeds.forEach((feed, index) => feed.source === undefined && join(index, feed));
+  return groups.map(({ volts, feeds: members }) => ({
+    volts,
+    ohms: ownOhms(feeds, members, members.includes(0) ? sourceOhms : undefined),
+    feeds: members.sort((a, b) => a - b),
+  }));
+}
+
+/** A feed in the order of the tape, as the solver wants it. */
+export interface Joint {
+  /** As given. */
+  index: number;
+  source: number;
+  at: number;
+  /** Source volts less the highest source volts. */
+  offsetVolts: number;
+  positiveOhms: number;
+  negativeOhms: number;
+  /**
+   * Joint with which zero ohms tie its positive (negative) conductor: their split can't be told, the first of a tie
+   * carries all in the equations. -1 where there is none.
+   */
+  positiveTie: number;
+  negativeTie: number;
+}
+
+/** A voltage ohms * (sum of the positive feed currents of `of`) that lowers what the feeds of `rows` see. */
+export interface SharedDrop {
+  ohms: number;
+  of: number[];
+  rows: number[];
+}
+
+export interface TapeCircuit {
+  joints: Joint[];
+  drops: SharedDrop[];
+  highestVolts: number;
+}
+
+function jointsOf(feeds: readonly TapeFeed[], sources: readonly Source[], highestVolts: number): Joint[] {
+  const joints = sources.flatMap((source, s) =>
+    source.feeds.map((index): Joint => {
+      const feed = feeds[index] as TapeFeed;
+      // A source with one feed is simply in series with it.
+      const inSeries = source.feeds.length === 1 ? source.ohms : 0;
+      return {
+        index,
+        source: s,
+        at: feed.at,
+        offsetVolts: source.volts - highestVolts,
+        positiveOhms: feed.positiveOhms + inSeries,
+        negativeOhms: feed.negativeOhms,
+        positiveTie: -1,
+        negativeTie: -1,
+      };
+    }),
+  );
+  return joints.sort((a, b) => a.at - b.at || a.index - b.index);
+}
+
+/** Every feed's negative conductor ends at the one negative terminal: zero ohms at one place are one conductor. */
+function tieNegatives(joints: Joint[], placeOf: (joint: Joint) => number): void {
+  const owners = new Map<number, number>();
+  joints.forEach((joint, i) => {
+    if (joint.negativeOhms > 0) return;
+    const owner = owners.get(placeOf(joint));
+    if (owner === undefined) owners.set(placeOf(joint), i);
+    else joint.negativeTie = owner;
+  });
+}
+
+function clash(index: number): never {
+  const message = 'joins another source of other volts with no resistance between them';
+  throw new EngineError('no-solution', `feeds.${index}: ${message}.`, [{ path: `feeds.${index}`, message }]);
+}
+
+/**
+ * Positive conductors without resistance at one place: of one source they are one conductor; of two sources without
+ * resistance they must have the same volts; a source with resistance gets it written into its feed's own equation.
+ */
+function tiePositives(
+  joints: Joint[],
+  sources: readonly Source[],
+  placeOf: (joint: Joint) => number,
+): SharedDrop[] {
+  const drops: SharedDrop[] = [];
+  const owners = new Map<number, Map<number, number>>();
+  const ideal = (source: number) => (sources[source]?.ohms ?? 0) === 0;
+  const zero = joints.map((_, i) => i).filter((i) => joints[i]?.positiveOhms === 0);
+  for (const i of [...zero].sort(
+    (a, b) => Number(ideal(joints[b]?.source ?? 0)) - Number(ideal(joints[a]?.source ?? 0)),
+  )) {
+    const joint = joints[i] as Joint;
+    const here = owners.get(placeOf(joint)) ?? new Map<number, number>();
+    owners.set(placeOf(joint), here);
+    // Sources without resistance are one owner, -1, whatever their name.
+    const key = ideal(joint.source) ? -1 : joint.source;
+    const owner = here.get(key);
+    if (owner !== undefined) {
+      const other = sources[joints[owner]?.source ?? 0]?.volts ?? 0;
+      if (!same(other, sources[joint.source]?.volts ?? 0)) clash(joint.index);
+      joint.positiveTie = owner;
+      continue;
+    }
+    if (here.size > 0) {
+      const ohms = sources[joint.source]?.ohms ?? 0;
+      joint.positiveOhms = ohms;
+      drops.push({ ohms: -ohms, of: [i], rows: [i] });
+    }
+    here.set(key, i);
+  }
+  return drops;
+}
+
+/** Orders, groups and ties the feeds of a tape. */
+export function tapeCircuit(
+  feeds: readonly TapeFeed[],
+  sources: readonly Source[],
+  rails: Rails,
+): TapeCircuit {
+  const highestVolts = sources.reduce((highest, { volts }) => Math.max(highest, volts), 0);
+  const joints = jointsOf(feeds, sources, highestVolts);
+  const { positive, negative } = rails.railOhmsPerMetre;
+  // A rail without resistance is one place.
+  const place = (ohmsPerMetre: number) => (joint: Joint) =>
+    ohmsPerMetre * rails.cutMetres === 0 ? 0 : joint.at;
+  tieNegatives(joints, place(negative));
+  const drops = tiePositives(joints, sources, place(positive));
+  sources.forEach(({ ohms, feeds: members }, s) => {
+    if (ohms === 0 || members.length < 2) return;
+    const own = joints.map((_, i) => i).filter((i) => joints[i]?.source === s);
+    drops.push({ ohms, of: own, rows: own });
+  });
+  return { joints, drops, highestVolts };
+}

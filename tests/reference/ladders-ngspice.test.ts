@@ -1,0 +1,127 @@
+/** Tapes of every kind, drawn at random, against ngspice run on the spot on the same circuit. */
+import { describe, expect, it } from 'vitest';
+import { runCalculation } from '@/lib/engine/run';
+import { tapeAnalysisCalculation } from '@/lib/sizing/tape-analysis';
+import type { TapeFeed } from '@/lib/sizing/tape-circuit';
+import type { TapeInput, TapeLoad } from '@/lib/sizing/tape-operating-point';
+import { N_SCALE, operatingPoint } from '../support/ngspice';
+import { type Random, seeded, testSeed } from '../support/random';
+
+function randomLoad(random: Random, volts: number): TapeLoad {
+  const model = random.pick(['constant-current', 'resistive', 'led-string', 'led-string'] as const);
+  if (model === 'constant-current') return { model, amps: random.decades(1e-4, 0.02) };
+  if (model === 'resistive') return { model, ohms: random.decades(20, 5000) };
+  return {
+    model,
+    leds: Math.max(1, Math.round(volts / random.between(3.2, 4.4))),
+    ballastOhms: random.chance(0.15) ? 0 : random.between(10, 300),
+    saturationAmps: random.decades(1e-20, 1e-16),
+    emissionCoefficient: random.between(2.2, 3.6),
+    seriesOhms: random.between(0.5, 4),
+  };
+}
+
+/** One to five feeds anywhere, zero-ohm conductors among them; now and then a second source. */
+function randomFeeds(random: Random, cuts: number, volts: number): TapeFeed[] {
+  const ohms = () => (random.chance(0.2) ? 0 : random.decades(1e-3, 1));
+  const places = new Set(Array.from({ length: random.whole(1, 5) }, () => random.whole(0, cuts)));
+  return [...places].map((at, i): TapeFeed => {
+    const other = i > 0 && random.chance(0.15);
+    return {
+      at,
+      volts: other ? volts * random.between(0.96, 1.04) : volts,
+      positiveOhms: ohms() + (other ? 0.01 : 0),
+      negativeOhms: ohms(),
+      ...(other ? { sourceOhms: random.decades(1e-3, 0.5) } : {}),
+    };
+  });
+}
+
+function randomTape(random: Random): TapeInput {
+  const cuts = random.whole(1, 60);
+  const volts = random.pick([5, 12, 24, 48]);
+  return {
+    cuts,
+    cutMetres: random.between(0.01, 0.17),
+    railOhmsPerMetre: { positive: random.decades(0.01, 0.4), negative: random.decades(0.01, 0.4) },
+    load: randomLoad(random, volts),
+    feeds: randomFeeds(random, cuts, volts),
+    ...(random.chance(0.5) ? { sourceOhms: random.decades(1e-3, 0.5) } : {}),
+    celsius: random.between(-20, 90),
+  };
+}
+
+/** A conductor; ngspice wants a source of 0 V where there is no resistance. */
+const wire = (name: string, a: string, b: string, ohms: number) =>
+  ohms > 0 ? `R${name} ${a} ${b} ${ohms}` : `Vw${name} ${a} ${b} DC 0`;
+
+function loadLines({ load }: TapeInput, k: number): string[] {
+  if (load.model === 'constant-current') return [`I${k} q${k} n${k} DC ${load.amps}`];
+  if (load.model === 'resistive') return [`Rl${k} q${k} n${k} ${load.ohms}`];
+  const lines = [wire(`b${k}`, `q${k}`, `x${k}_0`, load.ballastOhms)];
+  for (let i = 0; i < load.leds; i++) {
+    lines.push(`D${k}_${i} x${k}_${i} ${i === load.leds - 1 ? `n${k}` : `x${k}_${i + 1}`} M`);
+  }
+  return lines;
+}
+
+function netlistOf(input: TapeInput): string[] {
+  const { cuts, cutMetres, railOhmsPerMetre, load, feeds } = input;
+  const celsius = input.celsius ?? 25;
+  const half = {
+    p: (railOhmsPerMetre.positive * cutMetres) / 2,
+    n: (railOhmsPerMetre.negative * cutMetres) / 2,
+  };
+  const lines = [`.options temp=${celsius}`];
+  for (let k = 1; k <= cuts; k++) {
+    for (const rail of ['p', 'n'] as const) {
+      lines.push(`R${rail}a${k} ${rail}b${k - 1} ${rail}${k} ${half[rail]}`);
+      lines.push(`R${rail}b${k} ${rail}${k} ${rail}b${k} ${half[rail]}`);
+    }
+    lines.push(`Vm${k} p${k} q${k} DC 0`, ...loadLines(input, k));
+  }
+  const main = feeds[0]?.volts;
+  lines.push(`Vs s 0 DC ${main}`, wire('s', 's', 'st', input.sourceOhms ?? 0));
+  feeds.forEach((feed, i) => {
+    const own = feed.volts === main ? 'st' : `t${i}`;
+    if (own !== 'st')
+      lines.push(`Vs${i} s${i} 0 DC ${feed.volts}`, wire(`s${i}`, `s${i}`, own, feed.sourceOhms ?? 0));
+    lines.push(`Vf${i} ${own} f${i} DC 0`, wire(`fp${i}`, `f${i}`, `pb${feed.at}`, feed.positiveOhms));
+    lines.push(wire(`fn${i}`, `nb${feed.at}`, '0', feed.negativeOhms));
+  });
+  if (load.model === 'led-string') {
+    const n = load.emissionCoefficient * N_SCALE;
+    lines.push(
+      `.model M D(IS=${load.saturationAmps} N=${n} RS=${load.seriesOhms} EG=1.11 XTI=0 TNOM=${celsius})`,
+    );
+  }
+  return lines;
+}
+
+describe('random tapes against ngspice', () => {
+  const seed = testSeed();
+  const random = seeded(seed);
+  const tapes = Array.from({ length: 40 }, () => randomTape(random));
+
+  it.each(tapes.map((input, i) => ({ i, model: input.load.model, feeds: input.feeds.length, input })))(
+    `seed ${seed}, tape $i: $model, $feeds feeds`,
+    ({ input }) => {
+      const spice = operatingPoint(netlistOf(input));
+      const at = (name: string) => spice.get(name) ?? NaN;
+      const across = Array.from({ length: input.cuts }, (_, k) => at(`p${k + 1}`) - at(`n${k + 1}`));
+      if (input.load.model === 'constant-current' && Math.min(...across) < 0) {
+        expect(() => runCalculation(tapeAnalysisCalculation, input)).toThrow(/no physical solution/);
+        return;
+      }
+      const { result } = runCalculation(tapeAnalysisCalculation, input);
+      const near = (got: number, want: number, floor: number) =>
+        expect(Math.abs(got - want), `${got} against ${want}`).toBeLessThanOrEqual(
+          1e-6 * Math.abs(want) + floor,
+        );
+      result.loadVolts.forEach((volts, k) => near(volts, across[k] ?? NaN, 0));
+      // Currents that ngspice takes from the difference of two volts are rounded at 1e-15 V over a few milliohms.
+      result.loadAmps.forEach((amps, k) => near(amps, at(`vm${k + 1}#branch`), 1e-11));
+      result.feeds.forEach(({ amps }, i) => near(amps, at(`vf${i}#branch`), 1e-10));
+    },
+  );
+});
