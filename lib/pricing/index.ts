@@ -1,4 +1,7 @@
 /** The price calculations. */
 import type { Calculation } from '@/lib/engine/contract';
+import { priceLinesCalculation } from './price-lines';
 
-export const pricingCalculations: Calculation[] = [];
+export { priceLines } from './price-lines';
+
+export const pricingCalculations = [priceLinesCalculation] as unknown as Calculation[];
