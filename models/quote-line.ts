@@ -15,6 +15,7 @@ export class QuoteLine extends Model<InferAttributes<QuoteLine>, InferCreationAt
   declare source: string;
   declare sourceId: CreationOptional<string | null>;
   declare sourceSha256: CreationOptional<string | null>;
+  declare sourceDescription: CreationOptional<string>;
   declare areaName: CreationOptional<string>;
   declare description: string;
   declare quantity: string;
@@ -38,6 +39,7 @@ export function initQuoteLine(sequelize: Sequelize): void {
       source: { type: DataTypes.TEXT, allowNull: false },
       sourceId: { type: DataTypes.UUID },
       sourceSha256: { type: DataTypes.TEXT },
+      sourceDescription: { type: DataTypes.TEXT },
       areaName: { type: DataTypes.TEXT },
       description: { type: DataTypes.TEXT, allowNull: false },
       quantity: { type: DataTypes.DECIMAL(14, 4), allowNull: false },

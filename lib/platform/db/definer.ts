@@ -17,3 +17,5 @@ export const personIdByReset = (tokenSha256: string) => id('person_id_by_reset($
 export const personIdForNewEmail = (email: string) => id('person_id_for_new_email($1)', [email]);
 export const shopIdsByPerson = (personId: string) => ids('shop_ids_by_person($1)', [personId]);
 export const shopIdsWithOutbox = (most: number) => ids('shop_ids_with_outbox($1)', [most]);
+export const shopIdByLink = (tokenSha256: string) => id('shop_id_by_link($1)', [tokenSha256]);
+export const linkIdByToken = (tokenSha256: string) => id('link_id_by_token($1)', [tokenSha256]);
