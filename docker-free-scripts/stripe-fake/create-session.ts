@@ -3,7 +3,7 @@ import type Stripe from 'stripe';
 import { badParam, missingParam } from './errors';
 import type { Fake } from './fake';
 import { newId, nowSeconds } from './ids';
-import { newSession } from './objects';
+import { newSession, type SessionInput } from './objects';
 import type { Params } from './params';
 import type { Method, StoredSession } from './store';
 
@@ -62,14 +62,17 @@ function totalOf(items: Stripe.LineItem[]): { amount: number; currency: string }
   return { amount, currency };
 }
 
-function methodsOf(params: Params, currency: string): Method['type'][] {
-  const asked = params.texts('payment_method_types');
-  const unknown = asked.find((method) => !(METHODS as readonly string[]).includes(method));
-  if (unknown !== undefined)
-    throw badParam('payment_method_types', `The stand-in does not know the payment method type: ${unknown}`);
-  if (asked.includes('us_bank_account') && currency !== 'usd')
-    throw badParam('payment_method_types', 'The payment method type us_bank_account is for usd only.');
-  return asked.length > 0 ? (asked as Method['type'][]) : ['card'];
+/** The service works out what suits the currency; `allowed_payment_method_types` narrows that down. */
+function methodsOf(params: Params, currency: string): Pick<SessionInput, 'methods' | 'allowed'> {
+  const allowed = params.texts('allowed_payment_method_types');
+  const suits = METHODS.filter((method) => method === 'card' || currency === 'usd');
+  const methods = allowed.length > 0 ? suits.filter((method) => allowed.includes(method)) : suits;
+  if (methods.length === 0)
+    throw badParam(
+      'allowed_payment_method_types',
+      `No payment method of ${allowed.join(', ')} can be offered in ${currency}; the stand-in knows ${METHODS.join(', ')}.`,
+    );
+  return { methods, allowed: allowed.length > 0 ? allowed : null };
 }
 
 function expiryOf(params: Params): number {
@@ -124,7 +127,7 @@ export function createSession(fake: Fake, account: string, params: Params): Stor
     customerEmail: emailOf(params),
     clientReferenceId: params.text('client_reference_id', 200) ?? null,
     metadata: params.metadata(),
-    methods: methodsOf(params, currency),
+    ...methodsOf(params, currency),
     expiresAt: expiryOf(params),
     payUrl: (id: string) => `${fake.config.publicUrl ?? fake.url}/pay/${id}`,
   };

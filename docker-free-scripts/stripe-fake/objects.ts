@@ -13,6 +13,7 @@ export interface SessionInput {
   clientReferenceId: string | null;
   metadata: Record<string, string>;
   methods: Method['type'][];
+  allowed: string[] | null;
   expiresAt: number;
   payUrl: (id: string) => string;
 }
@@ -25,7 +26,7 @@ export function newSession(input: SessionInput): Stripe.Checkout.Session {
     adaptive_pricing: { enabled: false },
     after_expiration: null,
     allow_promotion_codes: null,
-    allowed_payment_method_types: null,
+    allowed_payment_method_types: input.allowed,
     amount_subtotal: input.amount,
     amount_total: input.amount,
     automatic_tax: { enabled: false, liability: null, provider: null, status: null },
@@ -93,7 +94,7 @@ export function newIntent({ session, intent }: StoredSession): Stripe.PaymentInt
   return {
     id,
     object: 'payment_intent',
-    allowed_payment_method_types: null,
+    allowed_payment_method_types: session.allowed_payment_method_types,
     amount: session.amount_total ?? 0,
     amount_capturable: 0,
     amount_received: 0,
