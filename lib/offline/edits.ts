@@ -1,0 +1,124 @@
+/** Edits on the device: shown at once, queued as events, coalesced while they have not been sent. */
+import type { Entity } from './protocol';
+import type { OfflineStore, QueuedEvent } from './store';
+
+interface Edit {
+  scope: string;
+  collection: string;
+  id: string;
+  data: Record<string, unknown>;
+  archived?: boolean;
+}
+
+const now = () => new Date().toISOString();
+
+/** Applies an edit to the local copy and queues it. Typing on changes the event that still waits. */
+export async function putEntity(store: OfflineStore, edit: Edit): Promise<void> {
+  const { scope, collection, id, data, archived = false } = edit;
+  const kind = `${collection}.${archived ? 'archive' : 'put'}`;
+  await store.transaction('rw', store.entities, store.queue, async () => {
+    const before = await store.entities.get([scope, collection, id]);
+    await store.entities.put({
+      scope,
+      collection,
+      id,
+      data,
+      archived,
+      dirty: 1,
+      version: before?.version ?? 0,
+    });
+    const queued = await store.queue.where({ scope, entityId: id }).sortBy('seq');
+    const last = queued.at(-1);
+    // What is on its way or waits for a decision is not touched; a refused one is replaced by the mended edit.
+    if (last?.seq !== undefined && (last.state === 'pending' || last.state === 'refused')) {
+      await store.queue.update(last.seq, {
+        kind,
+        body: data,
+        at: now(),
+        state: 'pending',
+        ...(last.state === 'refused' ? { id: crypto.randomUUID() } : {}),
+      });
+      return;
+    }
+    await store.queue.add({
+      id: crypto.randomUUID(),
+      scope,
+      collection,
+      kind,
+      entityId: id,
+      body: data,
+      baseVersion: null,
+      at: now(),
+      state: 'pending',
+    });
+  });
+}
+
+/** Queues something that happened (a tick, a reading): never coalesced, never changed. */
+export async function addHappening(
+  store: OfflineStore,
+  happening: { scope: string; kind: string; body: Record<string, unknown> },
+): Promise<string> {
+  const id = crypto.randomUUID();
+  await store.queue.add({
+    id,
+    scope: happening.scope,
+    collection: 'happening',
+    kind: happening.kind,
+    entityId: id,
+    body: happening.body,
+    baseVersion: null,
+    at: now(),
+    state: 'pending',
+  });
+  return id;
+}
+
+/** The person's choice on a conflict: send mine again on top of theirs. */
+export async function keepMine(store: OfflineStore, event: QueuedEvent): Promise<void> {
+  const { seq, current } = event;
+  if (seq === undefined || !current) return;
+  await store.transaction('rw', store.entities, store.queue, async () => {
+    await store.entities.update([event.scope, event.collection, event.entityId], {
+      version: current.version,
+    });
+    await store.queue.update(seq, { id: crypto.randomUUID(), state: 'pending', baseVersion: null });
+  });
+}
+
+/** The other choice: theirs replaces mine here, and what I typed on top of it is dropped with it. */
+export async function takeTheirs(store: OfflineStore, event: QueuedEvent): Promise<void> {
+  const { current } = event;
+  if (!current) return;
+  await store.transaction('rw', store.entities, store.queue, async () => {
+    await store.queue.where({ scope: event.scope, entityId: event.entityId }).delete();
+    await writeServerEntity(store, event.scope, current);
+  });
+}
+
+/** Stores an entity as the server gave it, unless an edit of ours still waits on it. */
+export async function writeServerEntity(store: OfflineStore, scope: string, entity: Entity): Promise<void> {
+  const waiting = await store.queue.where({ scope, entityId: entity.id }).count();
+  if (waiting > 0) {
+    await store.entities.update([scope, entity.collection, entity.id], { version: entity.version });
+    return;
+  }
+  await store.entities.put({ ...entity, scope, dirty: 0 });
+}
+
+/** A fresh snapshot from the server: what is edited here keeps its edit, what is gone there goes. */
+export async function writeSnapshot(store: OfflineStore, scope: string, entities: Entity[]): Promise<void> {
+  await store.transaction('rw', store.entities, store.queue, async () => {
+    const known = new Set(entities.map((entity) => `${entity.collection}/${entity.id}`));
+    const waiting = new Set((await store.queue.where({ scope }).toArray()).map((event) => event.entityId));
+    const local = await store.entities.where({ scope }).toArray();
+    const gone = local.filter((one) => !waiting.has(one.id) && !known.has(`${one.collection}/${one.id}`));
+    await store.entities.bulkDelete(gone.map((one) => [one.scope, one.collection, one.id]));
+    // A version that others raised meanwhile must not hide a conflict: an edited entity keeps its base.
+    await store.entities.bulkPut(
+      entities
+        .filter((entity) => !waiting.has(entity.id))
+        .map((entity) => ({ ...entity, scope, dirty: 0 as const })),
+    );
+  });
+}

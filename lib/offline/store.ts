@@ -1,0 +1,76 @@
+/**
+ * The browser's store: what the screens show and what is still to be sent. One database per shop and person, so
+ * that nobody finds somebody else's work on a shared phone.
+ */
+import Dexie, { type Table } from 'dexie';
+import type { Entity } from './protocol';
+
+export interface StoredEntity extends Entity {
+  /** The job or sheet that it belongs to. */
+  scope: string;
+  /** There is an edit on this device that the server has not confirmed. */
+  dirty: 0 | 1;
+}
+
+export type EventState = 'pending' | 'sending' | 'conflict' | 'refused';
+
+export interface QueuedEvent {
+  seq?: number;
+  id: string;
+  scope: string;
+  collection: string;
+  kind: string;
+  entityId: string;
+  body: Record<string, unknown>;
+  /** Fixed when it is first sent, so that a repeat is the same to the letter. */
+  baseVersion: number | null;
+  at: string;
+  state: EventState;
+  message?: string;
+  issues?: { path: string; message: string }[];
+  current?: Entity;
+}
+
+export class OfflineStore extends Dexie {
+  entities!: Table<StoredEntity, [string, string, string]>;
+  queue!: Table<QueuedEvent, number>;
+  meta!: Table<{ key: string; value: unknown }, string>;
+
+  constructor(shopId: string, personId: string) {
+    super(`${STORE_PREFIX}${shopId}-${personId}`);
+    this.version(1).stores({
+      entities: '[scope+collection+id], [scope+collection], scope',
+      queue: '++seq, &id, scope, [scope+entityId]',
+      meta: 'key',
+    });
+  }
+}
+
+const STORE_PREFIX = 'lampwright-';
+const open = new Map<string, OfflineStore>();
+
+export function offlineStore(shopId: string, personId: string): OfflineStore {
+  const name = `${shopId}-${personId}`;
+  const known = open.get(name);
+  if (known) return known;
+  const store = new OfflineStore(shopId, personId);
+  open.set(name, store);
+  return store;
+}
+
+/** At sign-out: nothing of this person stays on the device. Says false where unsent work was kept instead. */
+export async function wipeOffline(force = false): Promise<boolean> {
+  const names = (await Dexie.getDatabaseNames()).filter((name) => name.startsWith(STORE_PREFIX));
+  let clean = true;
+  for (const name of names) {
+    const store = await new Dexie(name).open();
+    const unsent = store.tables.some((table) => table.name === 'queue')
+      ? await store.table('queue').count()
+      : 0;
+    store.close();
+    if (unsent > 0 && !force) clean = false;
+    else await Dexie.delete(name);
+  }
+  open.clear();
+  return clean;
+}
