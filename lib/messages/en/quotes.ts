@@ -107,7 +107,7 @@ export const quotes = {
   'mail.quote-sent.greeting': 'Good day {name},',
   'mail.quote-sent.greeting-plain': 'Good day,',
   'mail.quote-sent.body':
-    'here is our quote for “{title}” at {site}. The total is {total}, and the quote is good until {until}.',
+    'Here is our quote for “{title}” at {site}. The total is {total}, and the quote is good until {until}.',
   'mail.quote-sent.button': 'Read the quote and answer',
   'mail.quote-sent.how':
     'The page shows everything we would do and what it costs. You can choose additions there, accept with your name, or decline. The quote is attached as a PDF, too.',
@@ -115,9 +115,9 @@ export const quotes = {
     'The link is yours alone: whoever has it can read the quote and answer in your name. Do not pass this mail on.',
   'mail.quote-accepted.subject': 'Accepted: quote {number} of {shop}, {title}',
   'mail.quote-accepted.customer':
-    'thank you. You accepted our quote {number}, revision {revision}, on {when}. Please keep this mail: it is your record.',
+    'Thank you. You accepted our quote {number}, revision {revision}, on {when}. Please keep this mail: it is your record.',
   'mail.quote-accepted.by-office':
-    'thank you. We have recorded that you accepted our quote {number}, revision {revision}, on {when} ({reference}). Please tell us at once if that is not right.',
+    'Thank you. We have recorded that you accepted our quote {number}, revision {revision}, on {when} ({reference}). Please tell us at once if that is not right.',
   'mail.quote-accepted.shop': '{name} accepted quote {number}, revision {revision}, on {when}.',
   'mail.quote-accepted.words': 'The words that were agreed to',
   'mail.quote-accepted.signed': 'Signed: {name}',
