@@ -1,0 +1,47 @@
+import type { Metadata } from 'next';
+import { notFound } from 'next/navigation';
+import { OpenedBeacon } from '@/components/customer/beacon';
+import { CustomerQuote } from '@/components/customer/quote-page';
+import { Band } from '@/components/customer/section';
+import { visitorOfRequest } from '@/lib/links/request';
+import { message } from '@/lib/messages';
+import { customerView } from '@/lib/quotes/queries';
+
+interface Props {
+  params: Promise<{ link: string }>;
+}
+
+async function viewOf(link: string) {
+  const visitor = await visitorOfRequest(link);
+  if (!visitor) notFound();
+  return customerView(visitor.shopId, visitor.link.jobId);
+}
+
+export async function generateMetadata({ params }: Props): Promise<Metadata> {
+  const { link } = await params;
+  const view = await viewOf(link);
+  return view ? { title: { absolute: `${view.content.title} · ${view.content.shop.name}` } } : {};
+}
+
+export default async function CustomerPage({ params }: Props) {
+  const { link } = await params;
+  const view = await viewOf(link);
+  return (
+    <main id="main" className="mx-auto w-full max-w-3xl">
+      {view ? (
+        <>
+          <OpenedBeacon link={link} documentId={view.documentId} />
+          <CustomerQuote
+            view={view}
+            base={`/l/${link}`}
+            pdf={view.hasPdf ? `/l/${link}/documents/${view.documentId}` : null}
+          />
+        </>
+      ) : (
+        <Band>
+          <p>{message('customer.nothing-yet')}</p>
+        </Band>
+      )}
+    </main>
+  );
+}
