@@ -44,7 +44,7 @@ export interface ZodForm<I extends FieldValues, T> {
 }
 
 export function useZodForm<I extends FieldValues, T>(options: {
-  schema: z.ZodType<unknown, I>;
+  schema: z.core.$ZodType<unknown, I>;
   defaultValues: DefaultValues<NoInfer<I>>;
   action: (values: I, meta: FormMeta) => Promise<ActionResult<T>>;
   onDone?: (data: T) => void;

@@ -1,6 +1,6 @@
 /** The one wrapper of server actions: who is it, parse, may they, run, map errors. */
 import { unstable_rethrow } from 'next/navigation';
-import type { z } from 'zod';
+import { z } from 'zod';
 import { withShop } from '@/lib/platform/db';
 import { type AppError, toAppError } from '@/lib/platform/http/errors';
 import { idempotent } from '@/lib/platform/http/idempotency';
@@ -9,7 +9,7 @@ import type { ActionResult } from '@/lib/messages/result';
 import { findActor } from './actor';
 import { type Actor, type Permission, may } from './policy';
 
-export interface ActionSpec<S extends z.ZodType, T> {
+export interface ActionSpec<S extends z.core.$ZodType, T> {
   /** `domain.action`, as the permission table names it. */
   name: string;
   permission: Permission;
@@ -23,7 +23,7 @@ export interface ActionMeta {
   idempotencyKey?: string | undefined;
 }
 
-export type ShopAction<S extends z.ZodType, T> = (
+export type ShopAction<S extends z.core.$ZodType, T> = (
   shopId: string,
   input: z.input<S>,
   meta?: ActionMeta,
@@ -47,7 +47,7 @@ const refusal = (code: 'not-signed-in' | 'not-allowed', message: string): Action
 });
 
 /** Builds the action's body; `actions.ts` files export `async` functions that call it. */
-export function shopAction<S extends z.ZodType, T>(spec: ActionSpec<S, T>): ShopAction<S, T> {
+export function shopAction<S extends z.core.$ZodType, T>(spec: ActionSpec<S, T>): ShopAction<S, T> {
   return async (shopId, input, meta) => {
     try {
       const { signedIn, actor } = await findActor(shopId);
@@ -55,7 +55,7 @@ export function shopAction<S extends z.ZodType, T>(spec: ActionSpec<S, T>): Shop
         return refusal('not-signed-in', 'You are signed out. Sign in again; what you typed is still here.');
       if (!actor || !may(actor, spec.permission))
         return refusal('not-allowed', 'Your role in this shop does not allow this.');
-      const parsed = spec.schema.safeParse(input);
+      const parsed = z.safeParse(spec.schema, input);
       if (!parsed.success) {
         const issues = parsed.error.issues.map((i) => ({ path: i.path.join('.'), message: i.message }));
         return { ok: false, code: 'invalid-input', message: 'Some fields need another look.', issues };

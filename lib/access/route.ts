@@ -1,6 +1,7 @@
 /** The one wrapper of route handlers under /api/v1: who is it, same origin, size, parse, may they, run, map errors. */
 import { headers } from 'next/headers';
-import type { z } from 'zod';
+import { z } from 'zod';
+import { currentSession } from '@/lib/platform/auth';
 import { withShop } from '@/lib/platform/db';
 import { env } from '@/lib/platform/env';
 import { AppError, problemResponse, toAppError } from '@/lib/platform/http/errors';
@@ -54,8 +55,8 @@ export async function readJson(request: Request, maxBytes = DEFAULT_MAX_BYTES): 
   }
 }
 
-export function parseWith<S extends z.ZodType>(schema: S, input: unknown): z.output<S> {
-  const parsed = schema.safeParse(input);
+export function parseWith<S extends z.core.$ZodType>(schema: S, input: unknown): z.output<S> {
+  const parsed = z.safeParse(schema, input);
   if (parsed.success) return parsed.data;
   const issues = parsed.error.issues.map((issue) => ({ path: issue.path.join('.'), message: issue.message }));
   throw new AppError('invalid-input', 'Some fields need another look.', issues);
@@ -116,4 +117,20 @@ export function once<T>(
 ) {
   const key = call.request.headers.get('idempotency-key');
   return withShop(call.actor.shopId, () => idempotent(key, `${name}:${call.actor.membershipId}`, body, work));
+}
+
+export interface SignedInCall<P> {
+  params: P;
+  request: Request;
+  json: (body: unknown, status?: number) => Response;
+}
+
+/** For what belongs to no shop: any signed-in person, from our own pages. */
+export function signedInRoute<P>(spec: { name: string; run: (call: SignedInCall<P>) => Promise<Response> }) {
+  return (request: Request, context: { params: Promise<P> }): Promise<Response> =>
+    answer(spec.name, async () => {
+      if (!(await currentSession())) throw new AppError('not-signed-in', 'Sign in first.');
+      await assertSameOrigin();
+      return spec.run({ params: await context.params, request, json });
+    });
 }

@@ -23,7 +23,8 @@ function oneLine(text: string): string {
 let transport: Transporter | undefined;
 
 function transporter(): Transporter {
-  transport ??= createTransport(required('SMTP_URL'), {
+  transport ??= createTransport({
+    url: required('SMTP_URL'),
     ignoreTLS: env().LAMPWRIGHT_DEMO,
     disableFileAccess: true,
     disableUrlAccess: true,

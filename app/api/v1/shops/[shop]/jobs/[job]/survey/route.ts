@@ -1,0 +1,9 @@
+import { shopRoute } from '@/lib/access/route';
+import { loadSurvey } from '@/lib/surveys/queries';
+
+/** All that a phone needs to go on with this survey without a signal. No cost, no price. */
+export const GET = shopRoute<{ shop: string; job: string }>({
+  name: 'surveys.snapshot',
+  permission: 'work:edit',
+  run: async ({ actor, params, json }) => json(await loadSurvey(actor.shopId, params.job)),
+});
