@@ -37,10 +37,9 @@ const store = new S3rver({
 store.middleware.unshift(withoutTrailingSlash);
 
 const address = await store.run();
-console.log(`The object store answers on http://127.0.0.1:${address.port}`);
-
 for (const signal of ['SIGINT', 'SIGTERM', 'SIGHUP'])
   process.once(signal, () => {
     store.httpServer.closeAllConnections();
     store.close(() => process.exit(0));
   });
+console.log(`The object store answers on http://127.0.0.1:${address.port}`);

@@ -4,7 +4,7 @@ import { startStripeFake } from './server';
 
 export async function main(env: NodeJS.ProcessEnv): Promise<void> {
   const fake = await startStripeFake(fakeConfig(env));
-  console.log(`The card stand-in answers on ${fake.url}`);
   for (const signal of ['SIGINT', 'SIGTERM', 'SIGHUP'] as const)
     process.once(signal, () => void fake.close().then(() => process.exit(0)));
+  console.log(`The card stand-in answers on ${fake.url}`);
 }
