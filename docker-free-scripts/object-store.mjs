@@ -17,15 +17,6 @@ if (!process.env.OBJECT_STORE_PORT || !Number.isInteger(port) || port < 0 || por
 }
 mkdirSync(directory, { recursive: true, mode: 0o700 });
 
-/**
- * Answers both `/bucket` and `/bucket/`, as the SDK writes it when it lists. The signature covers the path as it
- * was sent, so `originalUrl` stays.
- */
-function withoutTrailingSlash(ctx, next) {
-  if (/^\/[^/]+\/$/.test(ctx.path)) ctx.path = ctx.path.slice(0, -1);
-  return next();
-}
-
 const store = new S3rver({
   port,
   address: '127.0.0.1',
@@ -34,7 +25,6 @@ const store = new S3rver({
   vhostBuckets: false,
   configureBuckets: [{ name: bucket }],
 });
-store.middleware.unshift(withoutTrailingSlash);
 
 const address = await store.run();
 for (const signal of ['SIGINT', 'SIGTERM', 'SIGHUP'])

@@ -30,7 +30,7 @@ const SET_UP =
   "The card service refuses the shop's account. Nothing was charged; the owner has to check the card settings.";
 const REUSED = 'This payment was already begun with other figures. Load the page again and start over.';
 
-function translate(error: unknown): PaymentServiceError {
+function translate(error: Stripe.errors.StripeError): PaymentServiceError {
   const { errors } = Stripe;
   if (error instanceof errors.StripeCardError) return new PaymentServiceError('declined', error.message);
   if (error instanceof errors.StripeIdempotencyError) return new PaymentServiceError('invalid', REUSED);
@@ -41,11 +41,10 @@ function translate(error: unknown): PaymentServiceError {
   return new PaymentServiceError('unavailable', DOWN);
 }
 
-/** Maps whatever the SDK threw; ours passes through. */
-export function toPaymentError(error: unknown): PaymentServiceError {
-  if (error instanceof PaymentServiceError) return error;
-  const { type, code, param, statusCode, requestId, message } = (error ??
-    {}) as Partial<Stripe.errors.StripeError>;
+/** Maps what the SDK threw. Anything else is a fault of ours and passes through as it is. */
+export function toPaymentError(error: unknown): unknown {
+  if (!(error instanceof Stripe.errors.StripeError)) return error;
+  const { type, code, param, statusCode, requestId, message } = error;
   const mapped = translate(error);
   log().warn(
     { type, code, param, statusCode, requestId, reason: message, kind: mapped.kind },

@@ -16,7 +16,7 @@ export type { PaymentNotice } from './webhook';
 
 type Account = string | null | undefined;
 
-/** Every function throws a PaymentServiceError, whose message may be shown. */
+/** What the service refuses is thrown as a PaymentServiceError, whose message may be shown. */
 export interface PaymentService {
   createCheckoutSession(input: NewCheckout): Promise<Checkout>;
   fetchCheckoutSession(id: string, account?: Account): Promise<Checkout>;
