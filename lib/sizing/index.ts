@@ -3,6 +3,8 @@ import type { Calculation } from '@/lib/engine/contract';
 import { arrayAnalysisCalculation } from './array-analysis';
 import { conductorResistanceCalculation } from './conductor-resistance';
 import { resistorArrayCalculation } from './resistor-array';
+import { retrofitCheckCalculation } from './retrofit-check';
+import { tapeAnalysisCalculation } from './tape-analysis';
 import { voltageDropCalculation } from './voltage-drop';
 
 export const sizingCalculations = [
@@ -10,4 +12,6 @@ export const sizingCalculations = [
   voltageDropCalculation,
   resistorArrayCalculation,
   arrayAnalysisCalculation,
+  tapeAnalysisCalculation,
+  retrofitCheckCalculation,
 ] as unknown as Calculation[];
