@@ -47,6 +47,7 @@ export function QuoteAnswer({
   sha256,
   content,
   ask,
+  work,
   children,
 }: {
   /** `/l/{link}`; null in a preview, where nothing can be sent. */
@@ -55,6 +56,8 @@ export function QuoteAnswer({
   sha256: string;
   content: Answerable;
   ask: string | null;
+  /** What is read before the additions. */
+  work: ReactNode;
   /** What stands between the total and the signature. */
   children: ReactNode;
 }) {
@@ -65,9 +68,14 @@ export function QuoteAnswer({
   const shownText = acceptText(content, choices, totals);
   return (
     <>
-      <Options options={content.options} settings={content.settings} choices={choices} onToggle={toggle} />
-      <Totals content={content} totals={totals} live />
-      {children}
+      {/* The bar follows the reader through this part and stays behind where the signature begins. */}
+      <div>
+        {work}
+        <Options options={content.options} settings={content.settings} choices={choices} onToggle={toggle} />
+        <Totals content={content} totals={totals} live />
+        {children}
+        <Bar total={formatMoney(totals.totalMinor, content.settings)} ask={ask} />
+      </div>
       <Band id="sign" title={message('customer.sign-title')}>
         <SignPanel
           base={base}
@@ -76,7 +84,6 @@ export function QuoteAnswer({
         />
         <DeclinePanel base={base} documentId={documentId} />
       </Band>
-      <Bar total={formatMoney(totals.totalMinor, content.settings)} ask={ask} />
     </>
   );
 }

@@ -30,6 +30,7 @@ function Settled({ view }: { view: CustomerView }) {
   const choices = acceptance?.choices ?? defaultChoices(content);
   return (
     <>
+      <QuoteWork content={content} />
       <Options options={content.options} settings={content.settings} choices={choices} />
       <Totals content={content} totals={totalsOf(content, choices)} />
       <QuoteNotes content={content} />
@@ -55,7 +56,6 @@ export function CustomerQuote({
       <QuoteHead content={content} steps={steps} stands={message(view.waitsFor)} />
       {acceptance ? <AcceptedNotice acceptance={acceptance} settings={content.settings} /> : null}
       {!open && !acceptance ? <ClosedNotice state={state as ClosedState} /> : null}
-      <QuoteWork content={content} />
       {open ? (
         <QuoteAnswer
           base={base}
@@ -63,6 +63,7 @@ export function CustomerQuote({
           sha256={view.sha256}
           content={answerable(content)}
           ask={askAddress(content)}
+          work={<QuoteWork content={content} />}
         >
           <QuoteNotes content={content} />
         </QuoteAnswer>

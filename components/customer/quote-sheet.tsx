@@ -52,13 +52,16 @@ function Line({ text, amount }: { text: string; amount: string }) {
 
 export function QuoteWork({ content }: { content: QuoteContent }) {
   const { settings, site } = content;
+  const named = content.lines.some((line) => line.area !== '');
   return (
     <Band title={message('customer.work')}>
       <p className="mb-2 text-ink-2">{[site.name, site.address].filter(Boolean).join(', ')}</p>
       {content.scopeNote ? <p className="mb-3 whitespace-pre-line">{content.scopeNote}</p> : null}
       {byArea(content.lines).map((group) => (
         <div key={group.area} className="mt-3">
-          {group.area ? <h3 className="font-sans text-base font-bold">{group.area}</h3> : null}
+          {named || group.area ? (
+            <h3 className="font-sans text-base font-bold">{group.area || message('customer.whole-job')}</h3>
+          ) : null}
           <ul>
             {group.lines.map((line) => (
               <Line
@@ -122,7 +125,7 @@ export function QuoteFoot({ content, pdf }: { content: QuoteContent; pdf: string
           <p className="mb-2 print:hidden">
             <a
               href={pdf}
-              className="inline-flex min-h-touch items-center font-bold"
+              className="inline-flex min-h-touch items-center font-bold underline"
               target="_blank"
               rel="noreferrer"
             >
@@ -134,12 +137,16 @@ export function QuoteFoot({ content, pdf }: { content: QuoteContent; pdf: string
         {shop.address ? <p className="text-ink-2">{shop.address}</p> : null}
         {shop.phone ? (
           <Reach label={message('customer.phone')}>
-            <a href={`tel:${shop.phone.replace(/[^\d+]/g, '')}`}>{shop.phone}</a>
+            <a className="underline" href={`tel:${shop.phone.replace(/[^\d+]/g, '')}`}>
+              {shop.phone}
+            </a>
           </Reach>
         ) : null}
         {shop.email ? (
           <Reach label={message('customer.mail')}>
-            <a href={`mailto:${shop.email}`}>{shop.email}</a>
+            <a className="underline" href={`mailto:${shop.email}`}>
+              {shop.email}
+            </a>
           </Reach>
         ) : null}
       </div>

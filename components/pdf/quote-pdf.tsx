@@ -53,15 +53,16 @@ function Head({ content }: { content: QuoteContent }) {
 
 function Work({ content }: { content: QuoteContent }) {
   const money = (minor: number) => formatMoney(minor, content.settings, { symbol: false });
+  const named = content.lines.some((line) => line.area !== '');
   return (
     <>
       <PdfPlate>{message('customer.work')}</PdfPlate>
       {content.scopeNote ? <PdfParagraphs items={[content.scopeNote]} /> : null}
       {byArea(content.lines).map((group) => (
         <View key={group.area}>
-          {group.area ? (
+          {named || group.area ? (
             <Text style={styles.area} minPresenceAhead={30}>
-              {group.area}
+              {group.area || message('customer.whole-job')}
             </Text>
           ) : null}
           {group.lines.map((line) => (

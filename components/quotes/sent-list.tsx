@@ -94,7 +94,7 @@ export function SentList({
           <p className="mt-1 flex flex-wrap gap-x-5">
             <Link
               href={`/s/${shopId}/jobs/${jobId}/quote/${revision.documentId}`}
-              className="inline-flex min-h-touch items-center"
+              className="inline-flex min-h-touch items-center underline"
             >
               As the customer sees it
             </Link>
@@ -103,14 +103,14 @@ export function SentList({
                 href={`/api/v1/shops/${shopId}/documents/${revision.documentId}/pdf`}
                 target="_blank"
                 rel="noreferrer"
-                className="inline-flex min-h-touch items-center"
+                className="inline-flex min-h-touch items-center underline"
               >
                 PDF
               </a>
             ) : null}
           </p>
           {OPEN.includes(revision.state) ? (
-            <div className="mt-2 flex flex-col gap-2">
+            <div className="mt-2 grid items-start gap-2 sm:grid-cols-3">
               {canSend && revision.state !== 'expired' ? (
                 <ResendTool shopId={shopId} jobId={jobId} sent={revision} />
               ) : null}

@@ -23,7 +23,7 @@ interface Of {
 }
 
 const TOOL = 'rounded-md border border-rule px-3';
-const SUMMARY = 'flex min-h-touch items-center font-bold';
+const SUMMARY = 'flex min-h-touch items-center justify-between gap-3 font-bold after:content-["+"]';
 
 export function ResendTool({ shopId, jobId, sent }: Of) {
   const router = useRouter();

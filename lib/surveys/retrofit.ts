@@ -1,5 +1,5 @@
 /** A change line on an existing circuit goes through the engine's retrofit check. */
-import { ExistingLuminaire, Part } from '@/models';
+import { Area, ExistingLuminaire, Part } from '@/models';
 import { type Answer, EngineError } from '@/lib/engine/contract';
 import { calculations } from '@/lib/engine/registry';
 import { runCalculation } from '@/lib/engine/run';
@@ -13,7 +13,9 @@ async function factsOf(line: ChangeLine): Promise<RetrofitFacts> {
     ? await ExistingLuminaire.findOne({ where: { id: line.existingLuminaireId } })
     : null;
   const part = line.newPartId ? await Part.findOne({ where: { id: line.newPartId } }) : null;
+  const area = await Area.findOne({ where: { id: line.areaId } });
   return {
+    hazards: area?.hazards ?? {},
     existing: existing
       ? {
           supplyVolts: existing.supplyVolts === null ? null : Number(existing.supplyVolts),

@@ -85,6 +85,15 @@ export const ACTIONS = [
   'relocate',
 ] as const;
 
+/** What the change itself settles about the wiring. */
+export const changeElectrical = z.strictObject({
+  lampholdersReplaced: z.boolean(),
+  disconnectAdded: z.boolean(),
+  emergencyFeedAfter: z.enum(['unswitched', 'switched', 'unknown']),
+  emergencyDriverAfter: z.enum(['listed-led', 'existing', 'unknown']),
+});
+export type ChangeElectrical = z.infer<typeof changeElectrical>;
+
 export const changeLine = z.strictObject({
   areaId: z.uuid(),
   existingLuminaireId: z.nullable(z.uuid()),
@@ -96,7 +105,7 @@ export const changeLine = z.strictObject({
   newType: text(200),
   newQuantity: quantity,
   newWatts: z.nullable(z.number().check(z.nonnegative('must not be negative'))),
-  electrical: z.record(z.string(), z.unknown()),
+  electrical: changeElectrical,
   notes: text(4_000),
 });
 export type ChangeLine = z.infer<typeof changeLine>;

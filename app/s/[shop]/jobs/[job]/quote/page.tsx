@@ -7,11 +7,13 @@ import { LineForm } from '@/components/quotes/line-form';
 import { SendPanel } from '@/components/quotes/send-panel';
 import { SentList } from '@/components/quotes/sent-list';
 import { TermsForm } from '@/components/quotes/terms-form';
+import { JobLine } from '@/components/job-line/job-line';
 import { PageBody } from '@/components/shell/header';
 import { ButtonLink } from '@/components/ui/button';
 import { EmptyState, Sheet } from '@/components/ui/sheet';
 import { pageActor } from '@/lib/access/actor';
 import { canEditWork, canSendQuote } from '@/lib/access/policy';
+import { message, messageOr } from '@/lib/messages';
 import { deskQuote } from '@/lib/quotes/queries';
 import type { DeskDraft, DeskQuote } from '@/lib/quotes/schema/desk';
 import { formatDateTime, formatMoney } from '@/lib/units';
@@ -51,7 +53,9 @@ function Lines({ shop, quote, draft, editable }: Part & { editable: boolean }) {
             needed={draft.lines.some((line) => line.changes.length > 0 || line.gone)}
           />
           <details open={draft.lines.length === 0}>
-            <summary className="flex min-h-touch items-center font-bold">Type a line</summary>
+            <summary className="inline-flex min-h-touch items-center rounded-md border-2 border-ink px-4 font-bold">
+              Type a line
+            </summary>
             <div className="pt-2">
               <LineForm
                 shopId={shop}
@@ -77,7 +81,7 @@ function Side({ shop, quote, draft, editable, sends }: Part & { editable: boolea
         <DraftTotals draft={draft} settings={settings} />
         <Link
           href={`/s/${shop}/jobs/${job.id}/quote/preview`}
-          className="mt-3 inline-flex min-h-touch items-center"
+          className="mt-3 inline-flex min-h-touch items-center underline"
         >
           Preview: as the customer will see it
         </Link>
@@ -124,25 +128,39 @@ export default async function QuotePage({ params }: Props) {
         </ButtonLink>
       }
     >
-      {draft ? (
-        <div className="grid items-start gap-5 lg:grid-cols-[minmax(0,1fr)_26rem]">
-          <Lines shop={shop} quote={quote} draft={draft} editable={editable} />
-          <Side shop={shop} quote={quote} draft={draft} editable={editable} sends={sends} />
-        </div>
-      ) : (
-        <Sheet title="Draft">
-          <EmptyState action={editable ? <OpenDraft shopId={shop} jobId={job} /> : null}>
-            {editable
-              ? 'There is no draft yet. Starting one takes over every change line and circuit of the survey, at today’s prices.'
-              : 'There is no draft yet. An estimator starts it when the survey is done.'}
-          </EmptyState>
-        </Sheet>
-      )}
-      {sent.length > 0 ? (
-        <Sheet title="Sent">
-          <SentList shopId={shop} jobId={job} sent={sent} settings={quote.settings} canSend={sends} />
-        </Sheet>
-      ) : null}
+      <Sheet>
+        <JobLine
+          size="large"
+          steps={quote.steps.map((step) => ({
+            ...step,
+            label: message(`job.step.${step.key}`),
+            sub: step.waitsFor ? messageOr(`job.wait.${step.waitsFor}`, '') : undefined,
+          }))}
+        />
+      </Sheet>
+      <div className="grid grid-cols-[minmax(0,1fr)] items-start gap-5 lg:grid-cols-[minmax(0,1fr)_26rem] lg:grid-rows-[auto_1fr]">
+        {draft ? (
+          <>
+            <Lines shop={shop} quote={quote} draft={draft} editable={editable} />
+            <div className="lg:col-start-2 lg:row-span-2 lg:row-start-1">
+              <Side shop={shop} quote={quote} draft={draft} editable={editable} sends={sends} />
+            </div>
+          </>
+        ) : (
+          <Sheet title="Draft">
+            <EmptyState action={editable ? <OpenDraft shopId={shop} jobId={job} /> : null}>
+              {editable
+                ? 'There is no draft yet. Starting one takes over every change line and circuit of the survey, at today’s prices.'
+                : 'There is no draft yet. An estimator starts it when the survey is done.'}
+            </EmptyState>
+          </Sheet>
+        )}
+        {sent.length > 0 ? (
+          <Sheet title="Sent">
+            <SentList shopId={shop} jobId={job} sent={sent} settings={quote.settings} canSend={sends} />
+          </Sheet>
+        ) : null}
+      </div>
     </PageBody>
   );
 }

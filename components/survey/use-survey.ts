@@ -1,0 +1,95 @@
+'use client';
+/** The survey of one job on this device: typed entities, edits, and what came with the last snapshot. */
+import { useCallback, useMemo } from 'react';
+import { putEntity } from '@/lib/offline/edits';
+import { type OfflineScope, useOffline } from '@/lib/offline/use-offline';
+import type { PartFigures } from '@/lib/parts/schema';
+import type { Answer } from '@/lib/engine/contract';
+import type { Area, ChangeLine, CircuitBody, Collection, Cove, Luminaire } from '@/lib/surveys/schema';
+import { DEFAULT_SETTINGS, type ShopSettings } from '@/lib/units/settings';
+
+export interface Kept<T> {
+  id: string;
+  dirty: boolean;
+  data: T;
+}
+
+interface Extra {
+  settings: ShopSettings;
+  benchWork: boolean;
+  parts: PartFigures[];
+  takenAt: string;
+  job: { id: string; number: string; title: string; siteName: string; surveyDone: boolean };
+}
+
+type Figured = { answer: Answer | null; openStops: number };
+
+export interface Survey {
+  offline: OfflineScope;
+  ready: boolean;
+  extra: Extra | null;
+  settings: ShopSettings;
+  areas: Kept<Area>[];
+  luminaires: Kept<Luminaire>[];
+  coves: Kept<Cove>[];
+  circuits: Kept<CircuitBody & Figured>[];
+  changeLines: Kept<ChangeLine & Figured>[];
+  save: (collection: Collection, id: string, data: object) => void;
+  archive: (collection: Collection, id: string, data: object) => void;
+}
+
+const SERVER_ONLY = new Set(['answer', 'openStops']);
+/** A body holds what the person may write; the server's own figures are not sent back to it. */
+const bodyOf = (data: object) =>
+  Object.fromEntries(Object.entries(data).filter(([key]) => !SERVER_ONLY.has(key)));
+
+export function useSurvey(options: { shopId: string; membershipId: string; jobId: string }): Survey {
+  const { shopId, membershipId, jobId } = options;
+  const base = `/api/v1/shops/${shopId}/jobs/${jobId}`;
+  const offline = useOffline({
+    shopId,
+    personId: membershipId,
+    scope: jobId,
+    snapshotUrl: `${base}/survey`,
+    eventsUrl: `${base}/events`,
+  });
+  const { store, entities, nudge } = offline;
+  const extra = (offline.extra ?? null) as Extra | null;
+
+  const of = useMemo(() => {
+    const pick = <T>(collection: Collection): Kept<T>[] =>
+      (entities ?? [])
+        .filter((one) => one.collection === collection && !one.archived)
+        .map((one) => ({ id: one.id, dirty: one.dirty === 1, data: one.data as T }));
+    return {
+      areas: pick<Area>('areas').sort((a, b) => a.data.position - b.data.position),
+      luminaires: pick<Luminaire>('luminaires'),
+      coves: pick<Cove>('coves'),
+      circuits: pick<CircuitBody & Figured>('circuits'),
+      changeLines: pick<ChangeLine & Figured>('change-lines').sort(
+        (a, b) => a.data.position - b.data.position,
+      ),
+    };
+  }, [entities]);
+
+  const save = useCallback(
+    (collection: Collection, id: string, data: object) =>
+      void putEntity(store, { scope: jobId, collection, id, data: bodyOf(data) }).then(nudge),
+    [store, jobId, nudge],
+  );
+  const archive = useCallback(
+    (collection: Collection, id: string, data: object) =>
+      void putEntity(store, { scope: jobId, collection, id, data: bodyOf(data), archived: true }).then(nudge),
+    [store, jobId, nudge],
+  );
+
+  return {
+    offline,
+    ready: entities !== undefined,
+    extra,
+    settings: extra?.settings ?? DEFAULT_SETTINGS,
+    ...of,
+    save,
+    archive,
+  };
+}
