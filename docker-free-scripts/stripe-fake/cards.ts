@@ -91,7 +91,7 @@ function cardProblems(typed: Typed, now: Date): Problems {
   if (number) problems.number = number;
   if (expiry) problems.expiry = expiry;
   if (!/^\d{3,4}$/.test(typed.cvc.trim()))
-    problems.cvc = 'The code has three digits, on the back of the card.';
+    problems.cvc = 'The CVC has three digits, on the back of the card.';
   return problems;
 }
 

@@ -61,7 +61,7 @@ const STYLE_HASH = createHash('sha256').update(CSS).digest('base64');
 export const PAGE_HEADERS = {
   'content-type': 'text/html; charset=utf-8',
   'cache-control': 'no-store',
-  'content-security-policy': `default-src 'none'; style-src 'sha256-${STYLE_HASH}'; base-uri 'none'; frame-ancestors 'none'`,
+  'content-security-policy': `default-src 'none'; img-src data:; style-src 'sha256-${STYLE_HASH}'; base-uri 'none'; frame-ancestors 'none'`,
   'referrer-policy': 'no-referrer',
   'x-content-type-options': 'nosniff',
 };

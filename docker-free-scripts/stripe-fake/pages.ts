@@ -27,14 +27,15 @@ const redirect = (location: string): HttpAnswer => ({
 const nextUrl = ({ session }: StoredSession) =>
   (session.success_url ?? '').replaceAll('{CHECKOUT_SESSION_ID}', session.id);
 
-const form = (stored: StoredSession, state: Partial<FormState> = {}, status = 200) =>
-  html(payForm(stored, { typed: NOTHING_TYPED, problems: {}, ...state }), status);
+/** With 200 whatever is wrong: a browser writes other answers to its console as errors of the page. */
+const form = (stored: StoredSession, state: Partial<FormState> = {}) =>
+  html(payForm(stored, { typed: NOTHING_TYPED, problems: {}, ...state }));
 
 function show(stored: StoredSession): HttpAnswer {
   const { session } = stored;
   if (session.status === 'complete')
     return html(donePage(nextUrl(stored), session.payment_status === 'unpaid'));
-  if (session.status === 'expired') return html(expiredPage(session.cancel_url), 410);
+  if (session.status === 'expired') return html(expiredPage(session.cancel_url));
   return stored.pending ? html(challengePage(stored)) : form(stored);
 }
 
@@ -61,7 +62,6 @@ function methodOf(typed: Typed): Method {
   return {
     type: card ? 'card' : 'us_bank_account',
     last4: digitsOf(card ? typed.number : typed.account).slice(-4),
-    brand: card ? 'visa' : '',
     name: typed.name.trim(),
   };
 }
@@ -69,7 +69,7 @@ function methodOf(typed: Typed): Method {
 function submit(fake: Fake, stored: StoredSession, body: string): HttpAnswer {
   const typed = typedIn(body, stored);
   const problems = checkTyped(typed, new Date());
-  if (Object.keys(problems).length > 0) return form(stored, { typed, problems }, 422);
+  if (Object.keys(problems).length > 0) return form(stored, { typed, problems });
   const method = methodOf(typed);
   if (method.type === 'us_bank_account') {
     beginDebit(fake, stored, method);
@@ -82,7 +82,7 @@ function submit(fake: Fake, stored: StoredSession, body: string): HttpAnswer {
   }
   if (outcome.kind === 'declined') {
     decline(fake, stored, method, outcome.refusal);
-    return form(stored, { typed, refusal: outcome.refusal.message }, 402);
+    return form(stored, { typed, refusal: outcome.refusal.message });
   }
   pay(fake, stored, method);
   return redirect(nextUrl(stored));
@@ -97,7 +97,7 @@ function confirm(fake: Fake, stored: StoredSession, body: string): HttpAnswer {
   }
   decline(fake, stored, method, NOT_AUTHENTICATED);
   const typed = { ...NOTHING_TYPED, name: method.name };
-  return form(stored, { typed, refusal: NOT_AUTHENTICATED.message }, 402);
+  return form(stored, { typed, refusal: NOT_AUTHENTICATED.message });
 }
 
 export function answerPage(fake: Fake, method: string, path: string, body: string): HttpAnswer {

@@ -72,7 +72,7 @@ function testNumbers(offersBank: boolean): string {
   ).join('');
   const bank = `<p class="bank-numbers">Bank debit: routing ${TEST_BANK.routing}, account ${TEST_BANK.account}.</p>`;
   return `<div class="below"><table><caption>Test numbers</caption>${cards}</table>
-<p class="soft">Any expiry to come, any three digits as the code.</p>${offersBank ? bank : ''}</div>`;
+<p class="soft">Any expiry to come, any three digits as the CVC.</p>${offersBank ? bank : ''}</div>`;
 }
 
 export interface FormState {
@@ -93,8 +93,8 @@ export function payForm(stored: StoredSession, { typed, problems, refusal }: For
   const again = notKept(typed.method === 'card' ? typed.number : typed.account);
   const hint = again ? { hint: again } : {};
   const number = show({ name: 'number', label: 'Card number', value: '', numeric: true, ...hint });
-  const expiry = show({ name: 'expiry', label: 'Expiry (MM / YY)', value: typed.expiry });
-  const cvc = show({ name: 'cvc', label: 'Code (CVC)', value: '', numeric: true });
+  const expiry = show({ name: 'expiry', label: 'Expiry MM/YY', value: typed.expiry });
+  const cvc = show({ name: 'cvc', label: 'CVC', value: '', numeric: true });
   const routing = show({ name: 'routing', label: 'Routing number', value: '', numeric: true });
   const account = show({ name: 'account', label: 'Account number', value: '', numeric: true });
   const only = offersCard

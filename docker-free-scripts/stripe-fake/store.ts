@@ -7,7 +7,6 @@ import type Stripe from 'stripe';
 export interface Method {
   type: 'card' | 'us_bank_account';
   last4: string;
-  brand: string;
   name: string;
 }
 
@@ -17,7 +16,7 @@ export interface StoredSession {
   intent: { description: string | null; metadata: Record<string, string>; receiptEmail: string | null };
   /** A card that waits for its authentication step. */
   pending: Method | null;
-  /** Where to go once it was paid: `session.url` is null by then. */
+  /** '' for the platform's own. */
   account: string;
 }
 
