@@ -83,31 +83,33 @@ function refuseNegative(input: TapeInput, minVolts: number, highestVolts: number
   ]);
 }
 
-function resultOf(input: TapeInput, point: OperatingPoint): TapeAnalysis {
-  const { highestVolts, loadDrops, loadAmps } = point;
+function range(figures: Float64Array): { least: number; most: number } {
   let least = Infinity;
   let most = -Infinity;
-  let dimmest = Infinity;
-  let brightest = -Infinity;
-  loadDrops.forEach((drop, k) => {
-    least = Math.min(least, drop);
-    most = Math.max(most, drop);
-    dimmest = Math.min(dimmest, loadAmps[k] ?? 0);
-    brightest = Math.max(brightest, loadAmps[k] ?? 0);
-  });
-  refuseNegative(input, highestVolts - most, highestVolts);
-  const feeds = point.feedAmps.map((amps, i) => {
-    const volts = point.sources[point.sourceOfFeed[i] ?? 0]?.volts ?? 0;
-    return { amps, watts: volts * amps };
-  });
+  for (const own of figures) {
+    least = Math.min(least, own);
+    most = Math.max(most, own);
+  }
+  return { least, most };
+}
+
+function resultOf(input: TapeInput, point: OperatingPoint): TapeAnalysis {
+  const { highestVolts, loadDrops, loadVolts, loadAmps, sources } = point;
+  const volts = range(loadVolts);
+  const amps = range(loadAmps);
+  refuseNegative(input, volts.least, highestVolts);
+  const feeds = point.feedAmps.map((own, i) => ({
+    amps: own,
+    watts: (sources[point.sourceOfFeed[i] ?? 0]?.volts ?? 0) * own,
+  }));
   return {
     feeds,
-    loadVolts: Array.from(loadDrops, (drop) => highestVolts - drop),
+    loadVolts: Array.from(loadVolts),
     loadAmps: Array.from(loadAmps),
-    minVolts: highestVolts - most,
-    maxVolts: highestVolts - least,
-    worstDropPct: (most / highestVolts) * 100,
-    dimmestPct: brightest === 0 ? null : (dimmest / brightest) * 100,
+    minVolts: volts.least,
+    maxVolts: volts.most,
+    worstDropPct: (range(loadDrops).most / highestVolts) * 100,
+    dimmestPct: amps.most === 0 ? null : (amps.least / amps.most) * 100,
     totalWatts: feeds.reduce((sum, { watts }) => sum + watts, 0),
   };
 }

@@ -25,6 +25,13 @@ export interface Source {
   feeds: number[];
 }
 
+/**
+ * Less than any joint made: taken as none. Resistances that are lost beside the others' rounding would leave the
+ * split between parallel conductors undetermined.
+ */
+const NEGLIGIBLE_OHMS = 1e-12;
+const ohmsOrNone = (ohms: number) => (ohms < NEGLIGIBLE_OHMS ? 0 : ohms);
+
 const same = (a: number, b: number) => atMost(a, b) && atLeast(a, b);
 
 function ownOhms(feeds: readonly TapeFeed[], members: readonly number[], common: number | undefined): number {
@@ -55,7 +62,7 @@ export function sourcesOf(feeds: readonly TapeFeed[], sourceOhms: number | undef
   feeds.forEach((feed, index) => feed.source === undefined && join(index, feed));
   return groups.map(({ volts, feeds: members }) => ({
     volts,
-    ohms: ownOhms(feeds, members, members.includes(0) ? sourceOhms : undefined),
+    ohms: ohmsOrNone(ownOhms(feeds, members, members.includes(0) ? sourceOhms : undefined)),
     feeds: members.sort((a, b) => a - b),
   }));
 }
@@ -66,8 +73,8 @@ export interface Joint {
   index: number;
   source: number;
   at: number;
-  /** Source volts less the highest source volts. */
-  offsetVolts: number;
+  /** Of its source. */
+  volts: number;
   positiveOhms: number;
   negativeOhms: number;
   /**
@@ -86,12 +93,15 @@ export interface SharedDrop {
 }
 
 export interface TapeCircuit {
+  cuts: number;
+  /** Of one cut. */
+  pieceOhms: { positive: number; negative: number };
   joints: Joint[];
   drops: SharedDrop[];
   highestVolts: number;
 }
 
-function jointsOf(feeds: readonly TapeFeed[], sources: readonly Source[], highestVolts: number): Joint[] {
+function jointsOf(feeds: readonly TapeFeed[], sources: readonly Source[]): Joint[] {
   const joints = sources.flatMap((source, s) =>
     source.feeds.map((index): Joint => {
       const feed = feeds[index] as TapeFeed;
@@ -101,9 +111,9 @@ function jointsOf(feeds: readonly TapeFeed[], sources: readonly Source[], highes
         index,
         source: s,
         at: feed.at,
-        offsetVolts: source.volts - highestVolts,
-        positiveOhms: feed.positiveOhms + inSeries,
-        negativeOhms: feed.negativeOhms,
+        volts: source.volts,
+        positiveOhms: ohmsOrNone(feed.positiveOhms + inSeries),
+        negativeOhms: ohmsOrNone(feed.negativeOhms),
         positiveTie: -1,
         negativeTie: -1,
       };
@@ -151,8 +161,7 @@ function tiePositives(
     const key = ideal(joint.source) ? -1 : joint.source;
     const owner = here.get(key);
     if (owner !== undefined) {
-      const other = sources[joints[owner]?.source ?? 0]?.volts ?? 0;
-      if (!same(other, sources[joint.source]?.volts ?? 0)) clash(joint.index);
+      if (!same(joints[owner]?.volts ?? 0, joint.volts)) clash(joint.index);
       joint.positiveTie = owner;
       continue;
     }
@@ -173,17 +182,21 @@ export function tapeCircuit(
   rails: Rails,
 ): TapeCircuit {
   const highestVolts = sources.reduce((highest, { volts }) => Math.max(highest, volts), 0);
-  const joints = jointsOf(feeds, sources, highestVolts);
-  const { positive, negative } = rails.railOhmsPerMetre;
+  const joints = jointsOf(feeds, sources);
+  const { cuts, cutMetres, railOhmsPerMetre } = rails;
+  const pieceOf = (ohmsPerMetre: number) => ohmsOrNone(ohmsPerMetre * cutMetres * cuts) / cuts;
+  const pieceOhms = {
+    positive: pieceOf(railOhmsPerMetre.positive),
+    negative: pieceOf(railOhmsPerMetre.negative),
+  };
   // A rail without resistance is one place.
-  const place = (ohmsPerMetre: number) => (joint: Joint) =>
-    ohmsPerMetre * rails.cutMetres === 0 ? 0 : joint.at;
-  tieNegatives(joints, place(negative));
-  const drops = tiePositives(joints, sources, place(positive));
+  const place = (ohms: number) => (joint: Joint) => (ohms === 0 ? 0 : joint.at);
+  tieNegatives(joints, place(pieceOhms.negative));
+  const drops = tiePositives(joints, sources, place(pieceOhms.positive));
   sources.forEach(({ ohms, feeds: members }, s) => {
     if (ohms === 0 || members.length < 2) return;
     const own = joints.map((_, i) => i).filter((i) => joints[i]?.source === s);
     drops.push({ ohms, of: own, rows: own });
   });
-  return { joints, drops, highestVolts };
+  return { cuts, pieceOhms, joints, drops, highestVolts };
 }

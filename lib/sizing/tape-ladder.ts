@@ -1,5 +1,5 @@
 /**
- * One linear solution of a fed tape: every load drawn as b - g * x, x being its drop below the highest source volts.
+ * One linear solution of a fed tape: every load drawn as b - g * x, x being its drop below a reference voltage.
  *
  * Rails of even resistance split exactly in two ladders without coupling but at the feeds. With R = R+ + R- and
  * k = R-/R per piece: the drop x between the rails is carried by K = (1-k)*I+ + k*I-, dx = R*K, and only the loads
@@ -9,7 +9,7 @@
  */
 import { EngineError } from '@/lib/engine/contract';
 import { banded, factor, type Factored, setEntry, solveFactored } from './banded';
-import type { Joint, Rails, SharedDrop, TapeCircuit } from './tape-circuit';
+import type { Joint, SharedDrop, TapeCircuit } from './tape-circuit';
 
 /** Between two joints, or beyond the first or last (no current enters there). */
 interface Stretch {
@@ -38,12 +38,11 @@ const K = 4;
 const D = 5;
 
 export class TapeLadder {
-  /** Drop of each load below the highest source volts. */
+  /** Drop of each load below the reference. */
   readonly drops: Float64Array;
-  /** Positive feed currents in the order of the joints; ties not yet shared out. */
-  readonly jointAmps: Float64Array;
-  /** Negative feed currents, drops and y at the joints: what fixes the rails' own volts. */
-  readonly jointState: Float64Array;
+  /** Currents in and back of the feeds in the order of the joints; ties not yet shared out. */
+  readonly positiveAmps: Float64Array;
+  readonly negativeAmps: Float64Array;
   private readonly pieceOhms: number;
   private readonly negativeShare: number;
   private readonly commonOhms: number;
@@ -52,30 +51,28 @@ export class TapeLadder {
   private readonly keptB: Float64Array;
   private readonly keptA: Float64Array;
 
-  constructor(
-    private readonly circuit: TapeCircuit,
-    rails: Rails,
-  ) {
-    const positive = rails.railOhmsPerMetre.positive * rails.cutMetres;
-    const negative = rails.railOhmsPerMetre.negative * rails.cutMetres;
+  constructor(private readonly circuit: TapeCircuit) {
+    const { positive, negative } = circuit.pieceOhms;
     this.pieceOhms = positive + negative;
     this.negativeShare = this.pieceOhms > 0 ? negative / this.pieceOhms : 0.5;
     this.commonOhms = positive * this.negativeShare;
-    this.drops = new Float64Array(rails.cuts);
-    this.keptG = new Float64Array(rails.cuts);
-    this.keptB = new Float64Array(rails.cuts);
-    this.keptA = new Float64Array(rails.cuts);
-    this.jointAmps = new Float64Array(circuit.joints.length);
-    this.jointState = new Float64Array(circuit.joints.length * UNKNOWNS);
-    this.stretches = stretchesOf(circuit.joints, rails.cuts);
+    this.drops = new Float64Array(circuit.cuts);
+    this.keptG = new Float64Array(circuit.cuts);
+    this.keptB = new Float64Array(circuit.cuts);
+    this.keptA = new Float64Array(circuit.cuts);
+    this.positiveAmps = new Float64Array(circuit.joints.length);
+    this.negativeAmps = new Float64Array(circuit.joints.length);
+    this.stretches = stretchesOf(circuit.joints, circuit.cuts);
   }
 
-  /** Solves for loads that draw drawn[k] - slope[k] * drop[k]; fills drops, jointAmps and jointState. */
-  solve(drawn: Float64Array, slope: Float64Array): void {
+  /** Solves for loads that draw drawn[k] - slope[k] * drop[k]; fills the drops and the feeds' amps. */
+  solve(drawn: Float64Array, slope: Float64Array, referenceVolts: number): void {
     const seen = this.stretches.map((stretch, i) => this.eliminate(stretch, i, drawn, slope));
-    const state = this.solveJoints(seen);
-    this.jointState.set(state);
-    this.circuit.joints.forEach((_, i) => (this.jointAmps[i] = state[i * UNKNOWNS + POSITIVE] ?? 0));
+    const state = this.solveJoints(seen, referenceVolts);
+    for (let i = 0; i < this.circuit.joints.length; i++) {
+      this.positiveAmps[i] = state[i * UNKNOWNS + POSITIVE] ?? 0;
+      this.negativeAmps[i] = state[i * UNKNOWNS + NEGATIVE] ?? 0;
+    }
     this.stretches.forEach((stretch, i) => this.restore(stretch, i, state));
   }
 
@@ -118,9 +115,9 @@ export class TapeLadder {
     }
   }
 
-  private solveJoints(seen: readonly Seen[]): Float64Array {
+  private solveJoints(seen: readonly Seen[], referenceVolts: number): Float64Array {
     const { joints, drops } = this.circuit;
-    const { matrix, rhs } = this.equations(seen);
+    const { matrix, rhs } = this.equations(seen, referenceVolts);
     const factored = factor(matrix);
     if (!factored) {
       throw new EngineError('no-solution', 'The feeds leave the currents undetermined.', [
@@ -131,7 +128,7 @@ export class TapeLadder {
     return drops.length === 0 ? state : withShared(factored, rhs, state, joints, drops);
   }
 
-  private equations(seen: readonly Seen[]) {
+  private equations(seen: readonly Seen[], referenceVolts: number) {
     const { joints } = this.circuit;
     const matrix = banded(joints.length * UNKNOWNS, 4, 5);
     const rhs = new Float64Array(joints.length * UNKNOWNS);
@@ -155,7 +152,7 @@ export class TapeLadder {
       set(1, NEGATIVE, -1);
       set(1, D, -1);
       conductors(set, joint, k);
-      if (joint.positiveTie < 0) rhs[at + 2] = joint.offsetVolts;
+      if (joint.positiveTie < 0) rhs[at + 2] = joint.volts - referenceVolts;
       const right = seen[i + 1] as Seen;
       if (last) {
         set(4, X, right.G);

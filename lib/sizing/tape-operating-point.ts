@@ -37,14 +37,18 @@ export interface OperatingPoint {
   highestVolts: number;
   /** Source of each feed as given. */
   sourceOfFeed: number[];
+  /** Out of the source through the positive conductor, and back through the negative one: they may differ. */
   feedAmps: number[];
-  /** Below the highest source volts: more digits than the load volts themselves. */
+  feedReturnAmps: number[];
+  loadVolts: Float64Array;
+  /** Below the highest source volts: more digits of a small drop than the load volts have. */
   loadDrops: Float64Array;
   loadAmps: Float64Array;
 }
 
 const LED_CELSIUS = 25;
-const MAX_STEPS = 2000;
+/** Seventeen were the most seen on anything that settles at all. */
+const MAX_STEPS = 200;
 /** Newton's error after a step of s slopes is about s^2 / 2 of the current: this leaves it in the last bits. */
 const SETTLED = 1e-8;
 
@@ -52,27 +56,46 @@ function noSolution(path: string, message: string): never {
   throw new EngineError('no-solution', `The tape has no operating point: ${message}.`, [{ path, message }]);
 }
 
-/** Amps at each load after the ladder was solved with `drawn - slope * drop`. */
-function drawnAmps(ladder: TapeLadder, drawn: Float64Array, slope: Float64Array): Float64Array {
-  return drawn.map((own, k) => own - (slope[k] ?? 0) * (ladder.drops[k] ?? 0));
+interface Loads {
+  volts: Float64Array;
+  /** Below the highest source volts. */
+  drops: Float64Array;
+  amps: Float64Array;
 }
 
-function linearLoads(ladder: TapeLadder, cuts: number, drawn: number, slope: number): Float64Array {
-  const all = new Float64Array(cuts).fill(drawn);
-  const slopes = new Float64Array(cuts).fill(slope);
-  ladder.solve(all, slopes);
-  return drawnAmps(ladder, all, slopes);
+/** A current that does not ask for volts, seen from the highest source volts. */
+function constantCurrents(ladder: TapeLadder, cuts: number, amps: number, volts: number): Loads {
+  const drawn = new Float64Array(cuts).fill(amps);
+  ladder.solve(drawn, new Float64Array(cuts), volts);
+  return { volts: ladder.drops.map((drop) => volts - drop), drops: ladder.drops, amps: drawn };
+}
+
+/** Under this share of the source volts, load volts keep more digits when seen from zero. */
+const LOW_SHARE = 0.01;
+
+function resistances(ladder: TapeLadder, cuts: number, ohms: number, volts: number): Loads {
+  const slope = new Float64Array(cuts).fill(1 / ohms);
+  const from = (reference: number) => {
+    ladder.solve(new Float64Array(cuts).fill(reference / ohms), slope, reference);
+    return ladder.drops.map((drop) => reference - drop);
+  };
+  let found = from(volts);
+  let drops = ladder.drops.slice();
+  if (found.some((own) => own < LOW_SHARE * volts)) {
+    found = from(0);
+    drops = found.map((own) => volts - own);
+  }
+  return { volts: found, drops, amps: found.map((own) => own / ohms) };
 }
 
 /** No load gets more than the source can push through the feeds and half a piece: a start above what flows. */
-function startAmps(string: SeriesString, circuit: TapeCircuit, rails: Rails): number {
-  const { positive, negative } = rails.railOhmsPerMetre;
-  const conductance = circuit.joints.reduce(
-    (sum, joint) =>
-      sum + 1 / (joint.positiveOhms + joint.negativeOhms + ((positive + negative) * rails.cutMetres) / 2),
+function startAmps(string: SeriesString, { pieceOhms, joints, highestVolts }: TapeCircuit): number {
+  const half = (pieceOhms.positive + pieceOhms.negative) / 2;
+  const conductance = joints.reduce(
+    (sum, { positiveOhms, negativeOhms }) => sum + 1 / (positiveOhms + negativeOhms + half),
     0,
   );
-  const amps = Math.min(stringAmps(string, circuit.highestVolts), circuit.highestVolts * conductance);
+  const amps = Math.min(stringAmps(string, highestVolts), highestVolts * conductance);
   return Number.isFinite(amps) ? amps : noSolution('load', 'nothing limits the current of its LEDs');
 }
 
@@ -82,8 +105,13 @@ function startAmps(string: SeriesString, circuit: TapeCircuit, rails: Rails): nu
  * the curve is convex, so both lie between the tangent's answer and the old point, and the exponential never runs
  * away. Started from above, the volts fall monotonically; nothing needs to be damped further.
  */
-function ledStrings(ladder: TapeLadder, string: SeriesString, start: number, rails: Rails, volts: number) {
-  const { cuts } = rails;
+function ledStrings(
+  ladder: TapeLadder,
+  string: SeriesString,
+  start: number,
+  cuts: number,
+  volts: number,
+): Loads {
   const slopeVolts = string.junctions[0]?.slopeVolts ?? 1;
   const points = new Float64Array(cuts).fill(stringVolts(string, start));
   const amps = new Float64Array(cuts).fill(start);
@@ -95,7 +123,7 @@ function ledStrings(ladder: TapeLadder, string: SeriesString, start: number, rai
     for (let k = 0; k < cuts; k++) {
       drawn[k] = (amps[k] ?? 0) + (slope[k] ?? 0) * (volts - (points[k] ?? 0));
     }
-    ladder.solve(drawn, slope);
+    ladder.solve(drawn, slope, volts);
     let furthest = 0;
     for (let k = 0; k < cuts; k++) {
       const solved = volts - (ladder.drops[k] ?? 0);
@@ -107,16 +135,18 @@ function ledStrings(ladder: TapeLadder, string: SeriesString, start: number, rai
       points[k] = change > 0 ? stringVolts(string, own) : solved;
       slope[k] = 1 / stringSlopeOhms(string, own);
     }
-    if (furthest <= settled) return amps;
+    if (furthest <= settled) {
+      return { volts: ladder.drops.map((drop) => volts - drop), drops: ladder.drops, amps };
+    }
   }
-  return noSolution('load', 'the figures do not settle');
+  return noSolution('load', 'the figures do not settle; look for resistances that are far too small');
 }
 
-function loadAmpsOf(input: TapeInput, circuit: TapeCircuit, ladder: TapeLadder): Float64Array {
+function loadsOf(input: TapeInput, circuit: TapeCircuit, ladder: TapeLadder): Loads {
   const { load, cuts } = input;
   const volts = circuit.highestVolts;
-  if (load.model === 'constant-current') return linearLoads(ladder, cuts, load.amps, 0);
-  if (load.model === 'resistive') return linearLoads(ladder, cuts, volts / load.ohms, 1 / load.ohms);
+  if (load.model === 'constant-current') return constantCurrents(ladder, cuts, load.amps, volts);
+  if (load.model === 'resistive') return resistances(ladder, cuts, load.ohms, volts);
   const string: SeriesString = {
     ohms: load.ballastOhms + load.leds * load.seriesOhms,
     junctions: [
@@ -126,19 +156,23 @@ function loadAmpsOf(input: TapeInput, circuit: TapeCircuit, ladder: TapeLadder):
       },
     ],
   };
-  return ledStrings(ladder, string, startAmps(string, circuit, input), input, volts);
+  return ledStrings(ladder, string, startAmps(string, circuit), cuts, volts);
 }
 
 /** Of conductors that zero ohms tie together each carries the same. */
-function feedAmpsOf({ joints }: TapeCircuit, jointAmps: Float64Array): number[] {
+function sharedOut(
+  { joints }: TapeCircuit,
+  amps: Float64Array,
+  tie: 'positiveTie' | 'negativeTie',
+): number[] {
+  const owners = joints.map((joint, i) => (joint[tie] < 0 ? i : joint[tie]));
   const members = new Map<number, number>();
-  const ownerOf = (i: number) => ((joints[i]?.positiveTie ?? -1) < 0 ? i : (joints[i]?.positiveTie ?? i));
-  joints.forEach((_, i) => members.set(ownerOf(i), (members.get(ownerOf(i)) ?? 0) + 1));
-  const amps = new Array<number>(joints.length).fill(0);
-  joints.forEach(
-    ({ index }, i) => (amps[index] = (jointAmps[ownerOf(i)] ?? 0) / (members.get(ownerOf(i)) ?? 1)),
-  );
-  return amps;
+  for (const owner of owners) members.set(owner, (members.get(owner) ?? 0) + 1);
+  const shares = new Array<number>(joints.length).fill(0);
+  owners.forEach((owner, i) => {
+    shares[joints[i]?.index ?? 0] = (amps[owner] ?? 0) / (members.get(owner) ?? 1);
+  });
+  return shares;
 }
 
 /**
@@ -151,16 +185,18 @@ function feedAmpsOf({ joints }: TapeCircuit, jointAmps: Float64Array): number[] 
 export function operatingPoint(input: TapeInput): OperatingPoint {
   const sources = sourcesOf(input.feeds, input.sourceOhms);
   const circuit = tapeCircuit(input.feeds, sources, input);
-  const ladder = new TapeLadder(circuit, input);
-  const loadAmps = loadAmpsOf(input, circuit, ladder);
+  const ladder = new TapeLadder(circuit);
+  const loads = loadsOf(input, circuit, ladder);
   const sourceOfFeed = new Array<number>(input.feeds.length).fill(0);
   sources.forEach(({ feeds }, s) => feeds.forEach((index) => (sourceOfFeed[index] = s)));
   return {
     sources,
     highestVolts: circuit.highestVolts,
     sourceOfFeed,
-    feedAmps: feedAmpsOf(circuit, ladder.jointAmps),
-    loadDrops: ladder.drops,
-    loadAmps,
+    feedAmps: sharedOut(circuit, ladder.positiveAmps, 'positiveTie'),
+    feedReturnAmps: sharedOut(circuit, ladder.negativeAmps, 'negativeTie'),
+    loadVolts: loads.volts,
+    loadDrops: loads.drops,
+    loadAmps: loads.amps,
   };
 }

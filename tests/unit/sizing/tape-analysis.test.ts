@@ -307,6 +307,23 @@ describe('hard to settle', () => {
     },
   );
 
+  it('loads that all but short the feed keep their digits', () => {
+    const { result } = solve({
+      load: { model: 'resistive', ohms: 0.001 },
+      feeds: [{ ...start, positiveOhms: 100, negativeOhms: 43 }],
+      railOhmsPerMetre: { positive: 1e-6, negative: 0 },
+    });
+    expect(Math.abs(total(result.loadAmps) / (result.feeds[0]?.amps ?? NaN) - 1)).toBeLessThan(1e-11);
+  });
+
+  it('resistances that are lost beside the others are taken as none', () => {
+    const feeds = [
+      { ...start, positiveOhms: 1, negativeOhms: 5e-324 },
+      { ...start, positiveOhms: 0, negativeOhms: 0 },
+    ];
+    expect(solve({ feeds }).result.feeds[0]?.amps).toBeCloseTo(0, 12);
+  });
+
   it('a feed at every boundary', () => {
     const feeds = Array.from({ length: 51 }, (_, at) => ({ ...start, at }));
     const { result } = solve({ feeds, sourceOhms: 0.05 });
