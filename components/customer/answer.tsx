@@ -5,7 +5,7 @@ import { message } from '@/lib/messages';
 import { acceptText } from '@/lib/quotes/schema/accept-text';
 import { defaultChoices, type QuoteContent } from '@/lib/quotes/schema/content';
 import { totalsOf } from '@/lib/quotes/schema/totals';
-import { formatMoney } from '@/lib/units';
+import { formatMoney } from '@/lib/units/money';
 import { DeclinePanel } from './decline';
 import { Options } from './options';
 import { Band } from './section';

@@ -3,10 +3,10 @@ import { useRouter } from 'next/navigation';
 import { type FormEvent, useState } from 'react';
 import { Button } from '@/components/ui/button';
 import { TextArea } from '@/components/ui/field';
-import { useHydrated } from '@/components/ui/form';
 import { Notice } from '@/components/ui/sheet';
 import { message } from '@/lib/messages';
 import { postAnswer } from './send';
+import { useHydrated } from './use-hydrated';
 
 export function DeclinePanel({ base, documentId }: { base: string | null; documentId: string }) {
   const router = useRouter();

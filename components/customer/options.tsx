@@ -1,6 +1,6 @@
 import { message } from '@/lib/messages';
 import type { ContentOption, QuoteContent } from '@/lib/quotes/schema/content';
-import { formatMoney } from '@/lib/units';
+import { formatMoney } from '@/lib/units/money';
 import { Band } from './section';
 
 /** Additions: boxes to tick while the quote waits for an answer, ticks in ink once it has one. */

@@ -3,11 +3,11 @@ import { useRouter } from 'next/navigation';
 import { type FormEvent, useEffect, useRef, useState } from 'react';
 import { Button } from '@/components/ui/button';
 import { CheckBox, TextInput } from '@/components/ui/field';
-import { useHydrated } from '@/components/ui/form';
 import { Notice } from '@/components/ui/sheet';
 import { message } from '@/lib/messages';
 import type { FieldIssue } from '@/lib/messages/result';
 import { postAnswer } from './send';
+import { useHydrated } from './use-hydrated';
 
 interface Signature {
   documentId: string;

@@ -7,6 +7,7 @@ export const quotes = {
   'customer.at': 'At',
   'customer.stands': 'Where your job stands',
   'customer.work': 'What we will do',
+  'customer.whole-job': 'For the whole job',
   'customer.options': 'You may add or leave out',
   'customer.option-in': 'In the total below; you may leave it out.',
   'customer.option-out': 'Not in the total below; you may add it.',
