@@ -4,6 +4,8 @@ import { Decimal } from 'decimal.js';
 /** Room for numeric(18,6) quantities times rates times percents without a rounding on the way. */
 export const Exact = Decimal.clone({ precision: 60, rounding: Decimal.ROUND_HALF_UP });
 
+export const decimalOf = (value: string | number | undefined) => new Exact(value ?? 0);
+
 /**
  * Rounds an amount in currency units to whole minor units, half away from zero.
  * @param digits of the minor unit: 0, 2 or 3

@@ -1,24 +1,6 @@
 /** What `price-lines` takes. The same schema serves form, API and stored record. */
 import * as z from 'zod/mini';
-import { Exact } from './money';
-
-/** ISO 4217 minor-unit digits of the currencies that are offered. */
-export const MINOR_DIGITS: Readonly<Record<string, number>> = {
-  USD: 2,
-  CAD: 2,
-  GBP: 2,
-  EUR: 2,
-  AUD: 2,
-  NZD: 2,
-  CHF: 2,
-  SEK: 2,
-  NOK: 2,
-  DKK: 2,
-  JPY: 0,
-  KRW: 0,
-  KWD: 3,
-  BHD: 3,
-};
+import { CURRENCY_CODES, minorDigits } from './currencies';
 
 const MOST = 1e12;
 const DECIMAL_TEXT = /^\d{1,13}(\.\d{1,12})?$/;
@@ -26,11 +8,14 @@ const DECIMAL_TEXT = /^\d{1,13}(\.\d{1,12})?$/;
 /** A decimal string or a number, not negative; kept as it came, so that 0.1 stays 0.1. */
 const decimal = (what: string) =>
   z
-    .union([z.number(), z.string().check(z.regex(DECIMAL_TEXT, `must be ${what} as digits with a point`))])
+    .union([z.number(), z.string().check(z.regex(DECIMAL_TEXT, `must be ${what} as digits with a point`))], {
+      error: ({ input }) =>
+        input === undefined ? 'is missing' : `must be ${what}: a number, or digits with a point as text`,
+    })
     .check(
       z.refine(
         (value) => typeof value === 'string' || (value >= 0 && value <= MOST),
-        `must be ${what}, not negative`,
+        `must be ${what}, not negative and at most 1e12`,
       ),
     );
 
@@ -59,9 +44,7 @@ const line = z.strictObject({
 export const priceLinesSchema = z.strictObject({
   currency: z
     .string()
-    .check(
-      z.refine((code) => code in MINOR_DIGITS, `must be one of ${Object.keys(MINOR_DIGITS).join(', ')}`),
-    ),
+    .check(z.refine((code) => minorDigits(code) !== null, `must be one of ${CURRENCY_CODES.join(', ')}`)),
   taxRounding: z.enum(['line', 'document']),
   lines: z.array(line).check(z.maxLength(20_000, 'must have at most 20,000 lines')),
   taxes: z.array(z.strictObject({ id, ratePct: percent(1_000) })),
@@ -74,5 +57,3 @@ export const priceLinesSchema = z.strictObject({
 
 export type PriceLinesInput = z.infer<typeof priceLinesSchema>;
 export type PriceLine = PriceLinesInput['lines'][number];
-
-export const decimalOf = (value: string | number | undefined) => new Exact(value ?? 0);
