@@ -1,7 +1,7 @@
 /** A draft's figures by the engine's price-lines: pure. */
 import { EngineError } from '@/lib/engine/contract';
 import { invalid } from '@/lib/platform/http/errors';
-import { priceLines } from '@/lib/pricing/price-lines';
+import { priceLines } from '@/lib/pricing/figure';
 import type { ShopSettings } from '@/lib/units/settings';
 import type { QuoteTotals } from './schema/content';
 import type { DraftLine, DraftTerms } from './schema/lines';

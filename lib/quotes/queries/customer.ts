@@ -1,5 +1,6 @@
 /** A quote as its reader sees it: by the customer's link, and at the desk. */
 import type { Actor } from '@/lib/access/policy';
+import { canBeSigned } from '@/lib/documents/schema';
 import { getJob } from '@/lib/jobs/queries';
 import { withShop } from '@/lib/platform/db';
 import { composeQuote } from '../compose';
@@ -10,11 +11,18 @@ import { contentOf, type QuoteForReader, quoteForCustomer, sentQuotes } from './
 
 type Stands = Pick<CustomerView, 'steps' | 'waitsFor'>;
 
-async function standsOf(jobId: string): Promise<Stands> {
+/** A quote that can be answered is what a customer's job waits for, whatever else the shop still has to do. */
+async function standsOf(jobId: string, waits: boolean): Promise<Stands> {
   const { steps } = await getJob(jobId);
+  if (!waits)
+    return {
+      steps: steps.map((step) => ({ key: step.key, state: step.state })),
+      waitsFor: `customer.wait.${steps.find((step) => step.state === 'open')?.waitsFor ?? 'nothing'}`,
+    };
+  const stateAt = (key: string) => (key === 'survey' ? 'reached' : key === 'quote' ? 'open' : 'beyond');
   return {
-    steps: steps.map((step) => ({ key: step.key, state: step.state })),
-    waitsFor: `customer.wait.${steps.find((step) => step.state === 'open')?.waitsFor ?? 'nothing'}`,
+    steps: steps.map((step) => ({ key: step.key, state: stateAt(step.key) })),
+    waitsFor: 'customer.wait.quote-waits-for-answer',
   };
 }
 
@@ -41,7 +49,7 @@ function viewOf({ document, state, content, acceptance }: QuoteForReader, stands
 export function customerView(shopId: string, jobId: string): Promise<CustomerView | null> {
   return withShop(shopId, async () => {
     const quote = await quoteForCustomer(shopId, jobId);
-    return quote ? viewOf(quote, await standsOf(jobId)) : null;
+    return quote ? viewOf(quote, await standsOf(jobId, canBeSigned(quote.state))) : null;
   });
 }
 
@@ -51,7 +59,10 @@ export function sentView(actor: Actor, jobId: string, documentId: string): Promi
   return withShop(shopId, async () => {
     const quote = (await sentQuotes(shopId, jobId)).find((sent) => sent.document.id === documentId);
     if (!quote) return null;
-    return viewOf({ ...quote, content: await contentOf(documentId) }, await standsOf(jobId));
+    return viewOf(
+      { ...quote, content: await contentOf(documentId) },
+      await standsOf(jobId, canBeSigned(quote.state)),
+    );
   });
 }
 
@@ -72,6 +83,6 @@ export function previewView(
       state: 'sent',
       acceptance: null,
     } as const;
-    return { ...unsent, content, ...(await standsOf(jobId)) };
+    return { ...unsent, content, ...(await standsOf(jobId, true)) };
   });
 }

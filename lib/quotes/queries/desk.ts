@@ -128,7 +128,7 @@ function sentOf(quote: SentQuote, content: QuoteContent): DeskSent {
 export function deskQuote(actor: Actor, jobId: string, ports: SourcePorts = livePorts): Promise<DeskQuote> {
   const { shopId } = actor;
   return withShop(shopId, async () => {
-    const { id, number, title, customerName, customerEmail } = await getJob(jobId);
+    const { id, number, title, customerName, customerEmail, steps } = await getJob(jobId);
     const composed = await composeQuote(shopId, jobId, new Date(), ports);
     const sent: DeskSent[] = [];
     for (const quote of await sentQuotes(shopId, jobId))
@@ -136,6 +136,7 @@ export function deskQuote(actor: Actor, jobId: string, ports: SourcePorts = live
     return {
       job: { id, number, title, customerName, customerEmail },
       settings: settingsOf(await getShop(shopId)),
+      steps,
       draft: composed ? await draftOf(shopId, composed, canSeeCost(actor)) : null,
       sent,
     };

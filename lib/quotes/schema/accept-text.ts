@@ -3,7 +3,7 @@
  * again when they sign, and what was shown is kept with the acceptance.
  */
 import { message } from '@/lib/messages';
-import { formatMoney } from '@/lib/units';
+import { formatMoney } from '@/lib/units/money';
 import type { QuoteContent, QuoteTotals } from './content';
 
 type Agreed = Pick<QuoteContent, 'number' | 'revision' | 'shop' | 'customer' | 'options' | 'settings'>;

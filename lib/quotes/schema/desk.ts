@@ -2,6 +2,7 @@
 import type { DocumentState } from '@/lib/documents/schema';
 import type { ShopSettings } from '@/lib/units/settings';
 import type { QuoteTotals } from './content';
+import type { CustomerStep } from './view';
 import type { Blocker, LineChange, LineSource } from './lines';
 
 export interface LineFigures {
@@ -84,6 +85,7 @@ export interface DeskSent {
 export interface DeskQuote {
   job: { id: string; number: string; title: string; customerName: string; customerEmail: string };
   settings: ShopSettings;
+  steps: { key: CustomerStep['key']; state: CustomerStep['state']; waitsFor: string | null }[];
   draft: DeskDraft | null;
   sent: DeskSent[];
 }

@@ -1,6 +1,6 @@
 /** The rows under a quote, as page, PDF and mail show them. */
 import { message } from '@/lib/messages';
-import { formatMoney } from '@/lib/units';
+import { formatMoney } from '@/lib/units/money';
 import type { QuoteContent, QuoteTotals } from './content';
 
 export interface TotalRow {

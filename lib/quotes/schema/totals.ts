@@ -1,5 +1,5 @@
 /** What a quote costs with the customer's choices: the engine's price-lines over amounts that are frozen. */
-import { priceLines } from '@/lib/pricing/price-lines';
+import { priceLines } from '@/lib/pricing/figure';
 import { minorToDecimal } from '@/lib/units/money';
 import type { ContentLine, QuoteContent, QuoteTotals } from './content';
 
