@@ -26,9 +26,13 @@ function find(name: string): Calculation {
   ]);
 }
 
+/** Some editors and shells put a byte order mark before the text. */
+const BYTE_ORDER_MARK = /^\uFEFF/;
+
 function parse(text: string): unknown {
+  if (text.trim() === '') throw notJson('it is empty');
   try {
-    return JSON.parse(text);
+    return JSON.parse(text.replace(BYTE_ORDER_MARK, ''));
   } catch (error) {
     throw notJson(error instanceof Error ? error.message : 'unreadable');
   }
@@ -62,18 +66,31 @@ async function readAll(): Promise<string> {
   return Buffer.concat(chunks).toString('utf8');
 }
 
+/** A word that is not understood is refused at once, rather than waited out on standard input. */
+function refuseExtra(words: readonly string[]): void {
+  const [extra] = words;
+  if (extra === undefined) return;
+  throw new EngineError('invalid-input', `"${extra}" is not understood here.`, [
+    { path: '', message: `has the unknown word "${extra}" after the name` },
+  ]);
+}
+
 async function main([name = 'list', ...rest]: string[]): Promise<number> {
   if (name === 'list') {
+    refuseExtra(rest);
     for (const { name: each, summary } of calculations.values())
       await write(`${each.padEnd(22)} ${summary}\n`);
     return 0;
   }
   if (name === 'schema') {
+    refuseExtra(rest.slice(1));
     await write(`${JSON.stringify(z.toJSONSchema(find(rest[0] ?? '').schema, { io: 'input' }), null, 2)}\n`);
     return 0;
   }
   const calculation = find(name);
-  if (rest.includes('--lines')) {
+  const lines = rest[0] === '--lines';
+  refuseExtra(lines ? rest.slice(1) : rest);
+  if (lines) {
     await answerLines(calculation);
     return 0;
   }

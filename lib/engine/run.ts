@@ -6,23 +6,14 @@ import {
   COMMAND_LINE_LIMITS,
   ENGINE_VERSION,
   EngineError,
-  type EngineIssue,
   type Limits,
 } from './contract';
+import { PLAIN_WORDS, toIssues } from './plain-words';
+
+export { toIssues };
 
 // zod/mini ships without texts; the messages name what is wrong in plain English.
 z.config(z.locales.en());
-
-/** Turns schema issues into `{path, message}`, naming unknown keys by their own path. */
-export function toIssues(error: z.core.$ZodError): EngineIssue[] {
-  return error.issues.flatMap((issue): EngineIssue[] => {
-    const path = issue.path.map(String);
-    if (issue.code === 'unrecognized_keys') {
-      return issue.keys.map((key) => ({ path: [...path, key].join('.'), message: 'is not a known key' }));
-    }
-    return [{ path: path.join('.'), message: issue.message }];
-  });
-}
 
 function firstNonFinite(value: unknown, path: string): string | null {
   if (typeof value === 'number') return Number.isFinite(value) ? null : path;
@@ -51,7 +42,7 @@ export function runCalculation<S extends z.ZodMiniType, R>(
   input: unknown,
   limits: Limits = COMMAND_LINE_LIMITS,
 ): Answer<R> {
-  const parsed = z.safeParse(calculation.schema, input);
+  const parsed = z.safeParse(calculation.schema, input, PLAIN_WORDS);
   if (!parsed.success) {
     const issues = toIssues(parsed.error);
     const first = issues[0];

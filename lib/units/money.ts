@@ -1,30 +1,8 @@
 /** Money: integer minor units with a currency. Formatting and parsing in one place. */
+import { CURRENCY_CODES, minorDigits } from '@/lib/pricing/currencies';
 import type { ShopSettings } from './settings';
 
-/** Minor-unit digits by ISO 4217 for the currencies offered. */
-const DIGITS: Readonly<Record<string, number>> = {
-  USD: 2,
-  CAD: 2,
-  GBP: 2,
-  EUR: 2,
-  AUD: 2,
-  NZD: 2,
-  CHF: 2,
-  SEK: 2,
-  NOK: 2,
-  DKK: 2,
-  JPY: 0,
-  KRW: 0,
-  KWD: 3,
-  BHD: 3,
-};
-
-export const CURRENCY_CODES = Object.keys(DIGITS);
-
-/** @returns how many digits the minor unit has, or null for a currency that is not known here. */
-export function minorDigits(currency: string): number | null {
-  return DIGITS[currency] ?? null;
-}
+export { CURRENCY_CODES, minorDigits };
 
 type MoneySettings = Pick<ShopSettings, 'currency' | 'locale'>;
 
