@@ -6,6 +6,7 @@ const CHARGE = 1.602176634e-19;
 const ZERO_CELSIUS = 273.15;
 /** Newton's steps shrink quadratically once near; this many are never needed from the starts used here. */
 const MAX_STEPS = 200;
+const LAST_STEP = 1e-8;
 
 /** Below this an LED gives no light that anyone sees (common practice). */
 export const DARK_AMPS = 1e-6;
@@ -80,13 +81,17 @@ function startAbove(string: SeriesString, smallest: number, volts: number): numb
  * Current through the string at `volts` across it, by Newton in z with I = Is * (exp(z) - 1), Is the smallest of
  * the string. V(z) is convex and rising, so from a start above the root every step falls monotonically to it:
  * no damping is needed. Newton in I or in V fails where the other of the two is nearly straight.
+ * @param near a current close by that saves steps; any will do
  * @returns A; Infinity where nothing in the string limits the current to what a double holds.
  */
-export function stringAmps(string: SeriesString, volts: number): number {
+export function stringAmps(string: SeriesString, volts: number, near?: number): number {
   if (volts === 0) return 0;
   let smallest = Infinity;
   for (const { saturationAmps } of string.junctions) smallest = Math.min(smallest, saturationAmps);
-  let z = volts > 0 ? startAbove(string, smallest, volts) : volts / (string.junctions[0]?.slopeVolts ?? 1);
+  let z: number;
+  if (near !== undefined) z = Math.log1p(near / smallest);
+  else if (volts > 0) z = startAbove(string, smallest, volts);
+  else z = volts / (string.junctions[0]?.slopeVolts ?? 1);
   for (let i = 0; i < MAX_STEPS; i++) {
     const rise = Math.expm1(z);
     const amps = smallest * rise;
@@ -101,7 +106,10 @@ export function stringAmps(string: SeriesString, volts: number): number {
     }
     const step = f / slope;
     z -= step;
-    if (Math.abs(step) <= 4e-16 * Math.abs(z)) break;
+    // A near current under the root throws the first step far above it: not beyond what is known to be above.
+    if (step < 0 && volts > 0) z = Math.min(z, startAbove(string, smallest, volts));
+    // The error left is about half the square of the step.
+    if (Math.abs(step) <= LAST_STEP * Math.min(1, Math.abs(z))) break;
   }
   return smallest * Math.expm1(z);
 }

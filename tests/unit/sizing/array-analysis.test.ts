@@ -134,16 +134,23 @@ const anySupply = fc.oneof(
 describe('laws', () => {
   it('the string law and its inverse agree over all that is physical', () => {
     fc.assert(
-      fc.property(fc.array(anyLed, { minLength: 1, maxLength: 5 }), log(1e-12, 1e3), (leds, amps) => {
-        const string = {
-          ohms: leds.reduce((sum, { seriesOhms }) => sum + seriesOhms, 0),
-          junctions: leds.map(({ saturationAmps, emissionCoefficient }) => ({
-            saturationAmps,
-            slopeVolts: 0.0257 * emissionCoefficient,
-          })),
-        };
-        expect(Math.abs(stringAmps(string, stringVolts(string, amps)) / amps - 1)).toBeLessThan(1e-9);
-      }),
+      fc.property(
+        fc.array(anyLed, { minLength: 1, maxLength: 5 }),
+        log(1e-12, 1e3),
+        log(1e-15, 1e6),
+        (leds, amps, near) => {
+          const string = {
+            ohms: leds.reduce((sum, { seriesOhms }) => sum + seriesOhms, 0),
+            junctions: leds.map(({ saturationAmps, emissionCoefficient }) => ({
+              saturationAmps,
+              slopeVolts: 0.0257 * emissionCoefficient,
+            })),
+          };
+          const volts = stringVolts(string, amps);
+          expect(Math.abs(stringAmps(string, volts) / amps - 1)).toBeLessThan(1e-9);
+          expect(Math.abs(stringAmps(string, volts, near) / amps - 1)).toBeLessThan(1e-9);
+        },
+      ),
       { numRuns: 500 },
     );
   });
