@@ -74,7 +74,7 @@ export function ledCurves(input: ArrayInput): SeriesString[][] {
 }
 
 /** LEDs alike are one junction with their slopes added: the solver's work then grows with kinds, not with LEDs. */
-function inSeries(ballastOhms: number, leds: readonly SeriesString[]): SeriesString {
+export function inSeries(ballastOhms: number, leds: readonly SeriesString[]): SeriesString {
   const slopes = new Map<number, number>();
   let ohms = ballastOhms;
   for (const piece of leds) {

@@ -1,6 +1,7 @@
 /** The circuit calculations, in the order in which `engine -- list` names them. */
 import type { Calculation } from '@/lib/engine/contract';
 import { arrayAnalysisCalculation } from './array-analysis';
+import { arraySpreadCalculation } from './array-spread';
 import { conductorResistanceCalculation } from './conductor-resistance';
 import { resistorArrayCalculation } from './resistor-array';
 import { retrofitCheckCalculation } from './retrofit-check';
@@ -12,6 +13,7 @@ export const sizingCalculations = [
   voltageDropCalculation,
   resistorArrayCalculation,
   arrayAnalysisCalculation,
+  arraySpreadCalculation,
   tapeAnalysisCalculation,
   retrofitCheckCalculation,
 ] as unknown as Calculation[];

@@ -10,7 +10,7 @@ import {
   type Outcome,
   refuse,
 } from '@/lib/engine/contract';
-import { celsius, count, fraction, positive } from './inputs';
+import { celsius, fraction, positive } from './inputs';
 import { findingsOf } from './resistor-array-findings';
 import {
   type ArrayString,
@@ -29,6 +29,8 @@ const DERATE_FROM_CELSIUS = 70;
 const DERATE_TO_CELSIUS = 155;
 const MIN_CURRENT_FRACTION = 0.5;
 
+const leds = z.number().check(z.int('must be a whole number'), z.minimum(1, 'must be at least 1'));
+
 const schema = z.strictObject({
   supply: supplyWindow,
   led: z.strictObject({
@@ -38,8 +40,9 @@ const schema = z.strictObject({
     amps: positive,
     maxAmps: positive,
   }),
-  count,
-  perString: z.optional(count),
+  // No most here: what is too large depends on where it runs.
+  count: leds,
+  perString: z.optional(leds),
   resistor: z.strictObject({
     series: z.enum(E_SERIES_NAMES),
     tolerancePct: z.number().check(z.nonnegative('must not be negative'), z.lt(100, 'must be below 100')),

@@ -130,7 +130,7 @@ function ledStrings(
       const change = solved - (points[k] ?? 0);
       furthest = Math.max(furthest, Math.abs(change));
       const along = (amps[k] ?? 0) + (slope[k] ?? 0) * change;
-      const own = change > 0 ? along : stringAmps(string, solved);
+      const own = change > 0 ? along : stringAmps(string, solved, amps[k]);
       amps[k] = own;
       points[k] = change > 0 ? stringVolts(string, own) : solved;
       slope[k] = 1 / stringSlopeOhms(string, own);

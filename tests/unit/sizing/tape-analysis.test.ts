@@ -255,6 +255,7 @@ describe('zero ohms', () => {
 describe('refusals', () => {
   it.each([
     [{ cuts: 5001 }, 'too-large cuts'],
+    [{ cuts: 1e12 }, 'too-large cuts'],
     [{ cuts: 0 }, 'invalid-input cuts'],
     [{ cutMetres: -1 }, 'invalid-input cutMetres'],
     [{ feeds: [] }, 'invalid-input feeds'],
