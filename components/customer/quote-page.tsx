@@ -6,7 +6,7 @@ import { defaultChoices } from '@/lib/quotes/schema/content';
 import { totalsOf } from '@/lib/quotes/schema/totals';
 import type { CustomerView } from '@/lib/quotes/schema/view';
 import { type Answerable, QuoteAnswer } from './answer';
-import { Options } from './options';
+import { SettledOptions } from './options';
 import { QuoteFoot, QuoteHead, QuoteNotes, QuoteWork } from './quote-sheet';
 import { AcceptedNotice, ClosedNotice, type ClosedState } from './state';
 import { Totals } from './totals';
@@ -31,7 +31,7 @@ function Settled({ view }: { view: CustomerView }) {
   return (
     <>
       <QuoteWork content={content} />
-      <Options options={content.options} settings={content.settings} choices={choices} />
+      <SettledOptions options={content.options} settings={content.settings} choices={choices} />
       <Totals content={content} totals={totalsOf(content, choices)} />
       <QuoteNotes content={content} />
     </>

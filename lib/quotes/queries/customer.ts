@@ -1,6 +1,6 @@
 /** A quote as its reader sees it: by the customer's link, and at the desk. */
 import type { Actor } from '@/lib/access/policy';
-import { canBeSigned } from '@/lib/documents/schema';
+import type { DocumentState } from '@/lib/documents/schema';
 import { getJob } from '@/lib/jobs/queries';
 import { withShop } from '@/lib/platform/db';
 import { composeQuote } from '../compose';
@@ -11,10 +11,20 @@ import { contentOf, type QuoteForReader, quoteForCustomer, sentQuotes } from './
 
 type Stands = Pick<CustomerView, 'steps' | 'waitsFor'>;
 
-/** A quote that can be answered is what a customer's job waits for, whatever else the shop still has to do. */
-async function standsOf(jobId: string, waits: boolean): Promise<Stands> {
+const UNACCEPTED = {
+  draft: 'customer.wait.quote-not-sent',
+  sent: 'customer.wait.quote-waits-for-answer',
+  opened: 'customer.wait.quote-waits-for-answer',
+  declined: 'customer.wait.declined',
+  expired: 'customer.wait.expired',
+  withdrawn: 'customer.wait.withdrawn',
+  superseded: 'customer.wait.superseded',
+} as const;
+
+/** Until it is accepted, the quote is what a customer's job waits at, whatever else the shop still has to do. */
+async function standsOf(jobId: string, state: DocumentState): Promise<Stands> {
   const { steps } = await getJob(jobId);
-  if (!waits)
+  if (state === 'accepted')
     return {
       steps: steps.map((step) => ({ key: step.key, state: step.state })),
       waitsFor: `customer.wait.${steps.find((step) => step.state === 'open')?.waitsFor ?? 'nothing'}`,
@@ -22,7 +32,7 @@ async function standsOf(jobId: string, waits: boolean): Promise<Stands> {
   const stateAt = (key: string) => (key === 'survey' ? 'reached' : key === 'quote' ? 'open' : 'beyond');
   return {
     steps: steps.map((step) => ({ key: step.key, state: stateAt(step.key) })),
-    waitsFor: 'customer.wait.quote-waits-for-answer',
+    waitsFor: UNACCEPTED[state],
   };
 }
 
@@ -49,7 +59,7 @@ function viewOf({ document, state, content, acceptance }: QuoteForReader, stands
 export function customerView(shopId: string, jobId: string): Promise<CustomerView | null> {
   return withShop(shopId, async () => {
     const quote = await quoteForCustomer(shopId, jobId);
-    return quote ? viewOf(quote, await standsOf(jobId, canBeSigned(quote.state))) : null;
+    return quote ? viewOf(quote, await standsOf(jobId, quote.state)) : null;
   });
 }
 
@@ -59,10 +69,7 @@ export function sentView(actor: Actor, jobId: string, documentId: string): Promi
   return withShop(shopId, async () => {
     const quote = (await sentQuotes(shopId, jobId)).find((sent) => sent.document.id === documentId);
     if (!quote) return null;
-    return viewOf(
-      { ...quote, content: await contentOf(documentId) },
-      await standsOf(jobId, canBeSigned(quote.state)),
-    );
+    return viewOf({ ...quote, content: await contentOf(documentId) }, await standsOf(jobId, quote.state));
   });
 }
 
@@ -83,6 +90,6 @@ export function previewView(
       state: 'sent',
       acceptance: null,
     } as const;
-    return { ...unsent, content, ...(await standsOf(jobId, true)) };
+    return { ...unsent, content, ...(await standsOf(jobId, 'sent')) };
   });
 }
