@@ -1,5 +1,5 @@
 /** Customers of the shop. All must run inside `withShop`. */
-import { select } from '@/lib/platform/db';
+import { select, withShop } from '@/lib/platform/db';
 
 export interface CustomerRow {
   id: string;
@@ -33,3 +33,6 @@ export async function findCustomer(id: string): Promise<CustomerRow | null> {
   );
   return rows[0] ?? null;
 }
+
+export const loadCustomers = (shopId: string) => withShop(shopId, listCustomers);
+export const loadCustomer = (shopId: string, id: string) => withShop(shopId, () => findCustomer(id));

@@ -1,5 +1,5 @@
 /** Jobs of the shop. All must run inside `withShop`. */
-import { select } from '@/lib/platform/db';
+import { select, withShop } from '@/lib/platform/db';
 import { notFound } from '@/lib/platform/http/errors';
 import { factsOfJobs } from './facts';
 import type { JobsQuery } from './schema';
@@ -91,3 +91,8 @@ export async function jobIdsOfCustomer(
     [customerId],
   );
 }
+
+/** For the jobs list: opens the shop itself. */
+export const jobsPage = (shopId: string, query: JobsQuery) => withShop(shopId, () => listJobs(query));
+export const loadJob = (shopId: string, jobId: string) => withShop(shopId, () => getJob(jobId));
+export const loadOpenJobs = (shopId: string) => withShop(shopId, openJobs);

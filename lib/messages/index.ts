@@ -7,10 +7,11 @@ import { DEFAULT_SETTINGS, type ShopSettings } from '@/lib/units/settings';
 import { crew } from './en/crew';
 import { findings } from './en/findings';
 import { jobs } from './en/jobs';
+import { people } from './en/people';
 import { quotes } from './en/quotes';
 import { working } from './en/working';
 
-const catalogue = { ...quotes, ...findings, ...working, ...crew, ...jobs };
+const catalogue = { ...quotes, ...findings, ...working, ...crew, ...jobs, ...people };
 
 export type MessageKey = keyof typeof catalogue;
 export type MessageValues = Record<string, string | number | null | undefined>;

@@ -40,3 +40,5 @@ export async function shopsOfPerson(personId: string): Promise<{ id: string; nam
 }
 
 export const isSelf = (actor: Actor, memberId: string): boolean => actor.membershipId === memberId;
+
+export const loadMembers = (shopId: string) => withShop(shopId, listMembers);
