@@ -1,6 +1,6 @@
 /** Electrical and other figures as screens print them: units always shown, a sensible number of digits. */
-import type { Parsed } from './money';
-import type { ShopSettings } from './settings';
+import { formatMoney } from './money';
+import { DEFAULT_SETTINGS, type ShopSettings } from './settings';
 
 export interface Figure {
   value: string;
@@ -9,10 +9,16 @@ export interface Figure {
 
 const MINUS = '\u2212';
 
+/** Decimals that leave about four significant digits, at most twelve. */
+function decimalsFor(size: number): number {
+  if (size === 0 || size >= 1000) return 0;
+  return Math.min(12, 3 - Math.floor(Math.log10(size)));
+}
+
 /** A number with about four significant digits, never in exponent form, with a true minus sign. */
 export function formatNumber(value: number, decimals?: number): string {
-  const size = Math.abs(value);
-  const auto = size === 0 ? 0 : size >= 1000 ? 0 : size >= 100 ? 1 : size >= 10 ? 2 : size >= 1 ? 3 : 4;
+  if (!Number.isFinite(value)) return '–';
+  const auto = decimalsFor(Math.abs(value));
   const fixed = Math.abs(value).toFixed(decimals ?? auto);
   const text = decimals === undefined && fixed.includes('.') ? fixed.replace(/\.?0+$/, '') : fixed;
   const [units = '0', rest] = text.split('.');
@@ -35,8 +41,21 @@ function withPrefix(value: number, unit: string): Figure {
   return { value: formatNumber(value * step.factor), unit: `${step.prefix}${unit}` };
 }
 
-/** A figure in an engine unit (`V`, `A`, `W`, `ohm`, `m`, `C`, `%`, …) as the shop shows it. */
-export function formatFigure(value: number, unit: string, settings: Pick<ShopSettings, 'units'>): Figure {
+/** A number for a field that is edited: all of its digits, no grouping, no exponent. */
+export function plainNumber(value: number): string {
+  if (!Number.isFinite(value)) return '';
+  const text = String(value);
+  return text.includes('e') ? value.toFixed(Math.abs(value) < 1 ? 20 : 0).replace(/\.?0+$/, '') : text;
+}
+
+type FigureSettings = Pick<ShopSettings, 'units'> & Partial<Pick<ShopSettings, 'currency' | 'locale'>>;
+
+/** Spelling of units that need no conversion. */
+const SPELLED: Readonly<Record<string, string>> = { mm2: 'mm²', m2: 'm²' };
+
+/** A figure in an engine unit (`V`, `A`, `W`, `ohm`, `m`, `C`, `%`, `minor`, …) as the shop shows it. */
+export function formatFigure(value: number, unit: string, settings: FigureSettings): Figure {
+  if (!Number.isFinite(value)) return { value: '–', unit: SPELLED[unit] ?? unit };
   switch (unit) {
     case 'V':
       return { value: formatNumber(value, 2), unit: 'V' };
@@ -59,34 +78,13 @@ export function formatFigure(value: number, unit: string, settings: Pick<ShopSet
       return settings.units === 'us'
         ? { value: formatNumber(value / 0.3048, 1), unit: 'ft' }
         : { value: formatNumber(value, 2), unit: 'm' };
+    case 'minor': {
+      const money = { ...DEFAULT_SETTINGS, ...settings };
+      return { value: formatMoney(Math.round(value), money, { symbol: false }), unit: money.currency };
+    }
     default:
-      return { value: formatNumber(value), unit };
+      return { value: formatNumber(value), unit: SPELLED[unit] ?? unit };
   }
-}
-
-/** A plain number as people type it: a decimal comma is taken for a point, grouping spaces are dropped. */
-export function parseNumber(text: string): Parsed<number> {
-  const clean = text.trim().replace(/\s/g, '').replace(MINUS, '-');
-  const pointed = /^-?\d+,\d{1,2}$/.test(clean)
-    ? clean.replace(',', '.')
-    : clean.replace(/,(?=\d{3}(\D|$))/g, '');
-  if (!/^-?(\d+\.?\d*|\.\d+)$/.test(pointed)) return { ok: false, message: 'Type a number.' };
-  return { ok: true, value: Number(pointed) };
-}
-
-/** A temperature in the shop's degrees as Celsius. */
-export function parseTemperature(text: string, settings: Pick<ShopSettings, 'units'>): Parsed<number> {
-  const unit = /([cf])\s*$/i.exec(text.trim())?.[1]?.toLowerCase();
-  const parsed = parseNumber(text.replace(/°?\s*[cf]?\s*$/i, ''));
-  if (!parsed.ok) return { ok: false, message: 'Type a temperature such as 77 or 25 C.' };
-  const fahrenheit = unit === 'f' || (unit === undefined && settings.units === 'us');
-  return { ok: true, value: fahrenheit ? (parsed.value - 32) / 1.8 : parsed.value };
-}
-
-/** Wire sizes as the trade writes them: "12 AWG", "1.5 mm²". */
-export function formatWireSize(size: string): string {
-  const awg = /^AWG (.+)$/.exec(size);
-  return awg ? `${awg[1]} AWG` : size.replace('mm2', 'mm²');
 }
 
 /** Paper sizes in millimetres. */

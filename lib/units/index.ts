@@ -2,5 +2,8 @@
 export * from './figures';
 export * from './length';
 export * from './money';
+export * from './parse-figures';
+export type { Parsed } from './parsed';
 export * from './settings';
 export * from './time';
+export * from './wire';

@@ -1,5 +1,6 @@
 /** Money: integer minor units with a currency. Formatting and parsing in one place. */
 import { CURRENCY_CODES, minorDigits } from '@/lib/pricing/currencies';
+import { parsed, type Parsed, pointed, squeeze, unread } from './parsed';
 import type { ShopSettings } from './settings';
 
 export { CURRENCY_CODES, minorDigits };
@@ -28,19 +29,26 @@ function currencySymbol({ currency, locale }: MoneySettings): string {
   return /[A-Za-z]$/.test(symbol) ? `${symbol}\u00a0` : symbol;
 }
 
-export type Parsed<T> = { ok: true; value: T } | { ok: false; message: string };
-
-/** Reads "1,234.50" or "$1234.5" as integer minor units. More digits than the currency has are refused. */
+/**
+ * Reads "1,234.50", "$1234.5" or "12,50" as integer minor units. More digits than the currency has are refused, and
+ * so is a comma that is neither between groups of three nor a decimal one.
+ */
 export function parseMoney(text: string, settings: MoneySettings): Parsed<bigint> {
   const digits = minorDigits(settings.currency) ?? 2;
-  const clean = text.replace(/[\s,$£€¥]/g, '');
-  const match = /^(-|−)?(\d{1,13})(?:\.(\d*))?$/.exec(clean);
-  if (!match) return { ok: false, message: 'Type an amount such as 1,234.50.' };
+  const bare = squeeze(text)
+    .replace(/[$£€¥₩]/, '')
+    .replace(new RegExp(`^${settings.currency}|${settings.currency}$`, 'i'), '');
+  const match = /^([-+])?(\d{1,13})(?:\.(\d*))?$/.exec(pointed(bare) ?? '');
+  if (!match) return unread('Type an amount such as 1,234.50.');
   const [, sign, units = '0', decimals = ''] = match;
   if (decimals.length > digits)
-    return { ok: false, message: `At most ${digits} digits after the point in ${settings.currency}.` };
+    return unread(
+      digits === 0
+        ? `Whole amounts only in ${settings.currency}.`
+        : `At most ${digits} digits after the point in ${settings.currency}.`,
+    );
   const value = BigInt(units + decimals.padEnd(digits, '0'));
-  return { ok: true, value: sign ? -value : value };
+  return parsed(sign === '-' ? -value : value);
 }
 
 /** Integer minor units as a plain decimal string in currency units: "1234.50". */
