@@ -4,7 +4,7 @@ import { Button } from '@/components/ui/button';
 import { TextInput } from '@/components/ui/field';
 import { errorOf, FormFailure, useZodForm } from '@/components/ui/form';
 import { Notice } from '@/components/ui/sheet';
-import { askForNewPassword } from '@/lib/people/open-actions';
+import { askForNewPassword } from '@/lib/people/actions';
 import { type ForgottenForm as Values, forgottenForm } from '@/lib/people/schema';
 
 export function ForgottenForm() {

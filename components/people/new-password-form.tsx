@@ -4,7 +4,7 @@ import { Button } from '@/components/ui/button';
 import { TextInput } from '@/components/ui/field';
 import { errorOf, FormFailure, useZodForm } from '@/components/ui/form';
 import { Notice } from '@/components/ui/sheet';
-import { setNewPassword } from '@/lib/people/open-actions';
+import { setNewPassword } from '@/lib/people/actions';
 import { type NewPasswordForm as Values, newPasswordForm } from '@/lib/people/schema';
 
 export function NewPasswordForm({ token }: { token: string }) {

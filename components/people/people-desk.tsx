@@ -1,6 +1,7 @@
 'use client';
 import { useRouter } from 'next/navigation';
 import { useState } from 'react';
+import { useWatch } from 'react-hook-form';
 import { Button } from '@/components/ui/button';
 import { CheckBox, TextInput } from '@/components/ui/field';
 import { errorOf, FormFailure, useZodForm } from '@/components/ui/form';
@@ -83,7 +84,7 @@ function AddPerson({ shopId }: { shopId: string }) {
       router.refresh();
     },
   });
-  const roles = form.watch('roles');
+  const roles = useWatch({ control: form.control, name: 'roles' });
   return (
     <Sheet title="Add a person">
       <form onSubmit={submit} noValidate className="flex flex-col gap-4">
@@ -139,7 +140,7 @@ function EditPerson({ shopId, member, onDone }: { shopId: string; member: Member
     action: (values, meta) => changePerson(shopId, values, meta),
     onDone,
   });
-  const roles = form.watch('roles');
+  const roles = useWatch({ control: form.control, name: 'roles' });
   return (
     <form onSubmit={submit} noValidate className="mt-3 flex flex-col gap-4">
       <FormFailure failure={failure}>

@@ -5,6 +5,7 @@ import { Notice } from '@/components/ui/sheet';
 import { moveLine, removeLine } from '@/lib/quotes/actions';
 import { byArea } from '@/lib/quotes/schema/content';
 import type { DeskLine } from '@/lib/quotes/schema/desk';
+import { readingOrder } from '@/lib/quotes/schema/order';
 import type { LineChange } from '@/lib/quotes/schema/lines';
 import { formatMoney } from '@/lib/units';
 import type { ShopSettings } from '@/lib/units/settings';
@@ -80,7 +81,8 @@ function Line({ line, all }: { line: DeskLine; all: DraftLinesProps }) {
   const { shopId, jobId, settings, defaults } = all;
   const [open, setOpen] = useState(false);
   const { running, failure, run } = useRun();
-  const at = all.lines.findIndex((other) => other.id === line.id);
+  const order = readingOrder(all.lines);
+  const at = order.findIndex((other) => other.id === line.id);
   const areas = [...new Set(all.lines.map((other) => other.areaName).filter(Boolean))];
   const move = (direction: 'up' | 'down') => run(() => moveLine(shopId, { jobId, id: line.id, direction }));
   const remove = () => run(() => removeLine(shopId, { jobId, id: line.id, baseVersion: line.version }));

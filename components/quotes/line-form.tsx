@@ -2,6 +2,7 @@
 import { useRouter } from 'next/navigation';
 import { useWatch } from 'react-hook-form';
 import { Button } from '@/components/ui/button';
+import { ConflictNotice, type Conflicting } from '@/components/ui/conflict';
 import { CheckBox, FigureInput, TextArea, TextInput } from '@/components/ui/field';
 import { errorOf, FormFailure, useZodForm } from '@/components/ui/form';
 import { saveLine } from '@/lib/quotes/actions';
@@ -31,13 +32,25 @@ function valuesOf(jobId: string, line: DeskLine | null, defaults: LineDefaults):
   };
 }
 
-const FIGURES = [
-  ['quantity', 'Quantity'],
-  ['unitCost', 'Parts, each'],
-  ['unitLabourHours', 'Hours, each'],
-  ['labourRate', 'Rate an hour'],
-  ['markupPct', 'Markup'],
-] as const;
+const LABELS = {
+  description: 'What the customer reads',
+  areaName: 'Area',
+  quantity: 'Quantity',
+  unitCost: 'Parts, each',
+  unitLabourHours: 'Hours, each',
+  labourRate: 'Rate an hour',
+  markupPct: 'Markup',
+  taxable: 'Taxed',
+  optional: 'An addition',
+} satisfies Partial<Record<keyof Values, string>>;
+
+/** The other's line as the form holds it. */
+function theirsOf(theirs: Conflicting): Partial<Values> {
+  const values = Object.fromEntries(Object.keys(LABELS).map((key) => [key, theirs[key]]));
+  return { ...(values as Partial<Values>), chosen: theirs['chosen'] === true, baseVersion: theirs.version };
+}
+
+const FIGURES = ['quantity', 'unitCost', 'unitLabourHours', 'labourRate', 'markupPct'] as const;
 
 /** Adds a typed line, or changes one. A line from the survey keeps its parts, hours and area. */
 export function LineForm({
@@ -58,7 +71,7 @@ export function LineForm({
   onDone?: () => void;
 }) {
   const router = useRouter();
-  const { form, submit, pending, failure } = useZodForm<Values, { id: string }>({
+  const { form, submit, pending, failure, clearFailure } = useZodForm<Values, { id: string }>({
     schema: lineForm,
     defaultValues: valuesOf(jobId, line, defaults),
     action: (values, meta) => saveLine(shopId, values, meta),
@@ -68,6 +81,11 @@ export function LineForm({
       onDone?.();
     },
   });
+  const theirs = failure?.code === 'conflict' ? (failure.current as Conflicting | undefined) : undefined;
+  const settle = (values: Values) => {
+    form.reset(values, { keepDefaultValues: true });
+    clearFailure();
+  };
   const key = line?.id ?? 'new';
   const sourced = line !== null && line.source !== 'typed';
   const optional = useWatch({ control: form.control, name: 'optional' });
@@ -83,10 +101,20 @@ export function LineForm({
     sourced && (name === 'quantity' || name === 'unitCost' || name === 'unitLabourHours');
   return (
     <form onSubmit={submit} noValidate className="flex flex-col gap-4">
-      <FormFailure failure={failure} />
+      {theirs ? (
+        <ConflictNotice
+          mine={form.getValues()}
+          theirs={theirs}
+          labels={LABELS}
+          onKeepMine={() => settle({ ...form.getValues(), baseVersion: theirs.version })}
+          onTakeTheirs={() => settle({ ...form.getValues(), ...theirsOf(theirs) })}
+        />
+      ) : (
+        <FormFailure failure={failure} />
+      )}
       <TextArea
         id={`description-${key}`}
-        label="What the customer reads"
+        label={LABELS.description}
         rows={2}
         error={errorOf(form, 'description')}
         {...form.register('description')}
@@ -94,7 +122,7 @@ export function LineForm({
       <div className="grid grid-cols-2 gap-3 sm:grid-cols-3">
         <TextInput
           id={`area-${key}`}
-          label="Area"
+          label={LABELS.areaName}
           list={`areas-${key}`}
           readOnly={sourced}
           autoComplete="off"
@@ -107,11 +135,11 @@ export function LineForm({
             <option key={area} value={area} />
           ))}
         </datalist>
-        {FIGURES.map(([name, label]) => (
+        {FIGURES.map((name) => (
           <FigureInput
             key={name}
             id={`${name}-${key}`}
-            label={label}
+            label={LABELS[name]}
             unit={unitOf(name)}
             readOnly={fixed(name)}
             hint={fixed(name) ? 'From the survey' : undefined}
@@ -121,7 +149,7 @@ export function LineForm({
         ))}
       </div>
       <div className="flex flex-col gap-1">
-        <CheckBox id={`taxable-${key}`} label="Taxed" {...form.register('taxable')} />
+        <CheckBox id={`taxable-${key}`} label={LABELS.taxable} {...form.register('taxable')} />
         <CheckBox
           id={`optional-${key}`}
           label="An addition that the customer may take or leave"

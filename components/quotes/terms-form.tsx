@@ -1,13 +1,14 @@
 'use client';
 import { useRouter } from 'next/navigation';
 import { Button } from '@/components/ui/button';
+import { ConflictNotice, type Conflicting } from '@/components/ui/conflict';
 import { FigureInput, TextArea, TextInput } from '@/components/ui/field';
 import { errorOf, FormFailure, useZodForm } from '@/components/ui/form';
 import { saveTerms } from '@/lib/quotes/actions';
 import type { DeskTerms } from '@/lib/quotes/schema/desk';
 import { type TermsForm as Values, termsForm } from '@/lib/quotes/schema/forms';
 
-const LABELS: Partial<Record<keyof Values, string>> = {
+const LABELS = {
   depositPct: 'Deposit',
   discountPct: 'Discount',
   overheadPct: 'Overhead',
@@ -17,7 +18,7 @@ const LABELS: Partial<Record<keyof Values, string>> = {
   validDays: 'Good for',
   scopeNote: 'Said before the lines',
   exclusions: 'Not included',
-};
+} satisfies Partial<Record<keyof Values, string>>;
 
 function valuesOf(jobId: string, terms: DeskTerms): Values {
   const { version, overheadPct, contingencyPct, validDays, ...rest } = terms;
@@ -29,26 +30,6 @@ function valuesOf(jobId: string, terms: DeskTerms): Values {
     contingencyPct: contingencyPct ?? '0',
     validDays: String(validDays),
   };
-}
-
-/** What somebody else saved meanwhile, beside what is typed here. */
-function Theirs({ current, mine }: { current: unknown; mine: Values }) {
-  if (typeof current !== 'object' || current === null) return null;
-  const theirs = current as Record<string, unknown>;
-  const differing = (Object.keys(LABELS) as (keyof Values)[]).filter(
-    (key) => key in theirs && String(theirs[key]) !== String(mine[key]),
-  );
-  if (differing.length === 0) return null;
-  return (
-    <dl className="grid grid-cols-[auto_1fr] gap-x-4 gap-y-1">
-      {differing.map((key) => (
-        <div key={key} className="contents">
-          <dt className="text-ink-2">{LABELS[key]}, saved by somebody else</dt>
-          <dd>{String(theirs[key])}</dd>
-        </div>
-      ))}
-    </dl>
-  );
 }
 
 export function TermsForm({
@@ -63,7 +44,7 @@ export function TermsForm({
   depositApplies: boolean;
 }) {
   const router = useRouter();
-  const { form, submit, pending, failure } = useZodForm<Values, { version: number }>({
+  const { form, submit, pending, failure, clearFailure } = useZodForm<Values, { version: number }>({
     schema: termsForm,
     defaultValues: valuesOf(jobId, terms),
     action: (values, meta) => saveTerms(shopId, values, meta),
@@ -72,10 +53,10 @@ export function TermsForm({
       router.refresh();
     },
   });
-  const current = failure?.code === 'conflict' ? failure.current : null;
-  const takeVersion = () => {
-    const version = (current as { version?: number } | null)?.version;
-    if (version !== undefined) form.setValue('baseVersion', version);
+  const theirs = failure?.code === 'conflict' ? (failure.current as Conflicting | undefined) : undefined;
+  const settle = (values: Values) => {
+    form.reset(values, { keepDefaultValues: true });
+    clearFailure();
   };
   const figure = (name: 'depositPct' | 'discountPct' | 'overheadPct' | 'contingencyPct' | 'taxRatePct') => (
     <FigureInput
@@ -89,16 +70,17 @@ export function TermsForm({
   );
   return (
     <form onSubmit={submit} noValidate className="flex flex-col gap-4">
-      <FormFailure failure={failure}>
-        {current ? (
-          <>
-            <Theirs current={current} mine={form.getValues()} />
-            <Button look="secondary" className="mt-2" onClick={takeVersion}>
-              Keep mine: save again after this
-            </Button>
-          </>
-        ) : null}
-      </FormFailure>
+      {theirs ? (
+        <ConflictNotice
+          mine={form.getValues()}
+          theirs={theirs}
+          labels={LABELS}
+          onKeepMine={() => settle({ ...form.getValues(), baseVersion: theirs.version })}
+          onTakeTheirs={() => settle(valuesOf(jobId, theirs as unknown as DeskTerms))}
+        />
+      ) : (
+        <FormFailure failure={failure} />
+      )}
       <div className="grid grid-cols-2 gap-3">
         {figure('depositPct')}
         {figure('discountPct')}

@@ -1,7 +1,6 @@
 /** A role's first screen: just what waits for that person. */
 import { type Actor, may } from '@/lib/access/policy';
-import { openJobs, type JobWithSteps } from '@/lib/jobs/queries';
-import type { StepKey, WaitKey } from '@/lib/jobs/stage';
+import { type JobWithSteps, openJobs, type StepKey, type WaitKey } from '@/lib/jobs/queries';
 import { withShop } from '@/lib/platform/db';
 import { getSettings } from '@/lib/shops/queries';
 import { formatDateTime } from '@/lib/units';

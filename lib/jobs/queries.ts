@@ -5,6 +5,8 @@ import { factsOfJobs } from './facts';
 import type { JobsQuery } from './schema';
 import { type JobFacts, type Stage, type Step, stepsOf } from './stage';
 
+export type { StepKey, WaitKey } from './stage';
+
 export interface JobRow {
   id: string;
   number: string;

@@ -1,6 +1,8 @@
 /** Parts and their dated prices. All must run inside `withShop`. */
-import { select } from '@/lib/platform/db';
-import type { PartFigures, PartKind } from './schema';
+import { select, withShop } from '@/lib/platform/db';
+import { getSettings } from '@/lib/shops/queries';
+import { minorDigits } from '@/lib/units';
+import type { PartFigures, PartForm, PartKind } from './schema';
 
 export interface PartRow extends Omit<PartFigures, 'labourHours'> {
   labourHours: string;
@@ -66,4 +68,48 @@ export async function priceOfParts(
       unitCost === null ? [] : [[id, { unitCost, sku, name }] as const],
     ),
   );
+}
+
+/** For the desk: opens the shop itself. Costs have up to six decimals; what is beyond the currency's own is kept only where it says something. */
+export async function loadParts(shopId: string) {
+  return withShop(shopId, async () => {
+    const { currency } = await getSettings(shopId);
+    const digits = minorDigits(currency) ?? 2;
+    return (await listParts()).map((part) => ({
+      id: part.id,
+      sku: part.sku,
+      kind: part.kind,
+      name: part.name,
+      unit: part.unit,
+      labourHours: String(Number(part.labourHours)),
+      cost: part.unitCost === null ? 'no price' : `${costText(part.unitCost, digits)} ${currency}`,
+    }));
+  });
+}
+
+function costText(cost: string, digits: number): string {
+  const [units = '0', decimals = ''] = cost.split('.');
+  const kept = decimals.replace(/0+$/, '').padEnd(digits, '0');
+  return kept === '' ? units : `${units}.${kept}`;
+}
+
+/** The form of one part as it is opened. */
+export async function loadPartForm(shopId: string, id: string): Promise<PartForm | null> {
+  return withShop(shopId, async () => {
+    const part = await findPart(id);
+    if (!part) return null;
+    return {
+      id: part.id,
+      baseVersion: part.version,
+      sku: part.sku,
+      kind: part.kind,
+      name: part.name,
+      unit: part.unit,
+      listed: part.listed,
+      packSize: String(Number(part.packSize)),
+      labourHours: String(Number(part.labourHours)),
+      unitCost: part.unitCost === null ? '0' : costText(part.unitCost, 2),
+      datasheet: JSON.stringify(part.datasheet, null, 2),
+    };
+  });
 }

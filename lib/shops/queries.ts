@@ -3,6 +3,7 @@ import { Shop } from '@/models';
 import { withShop } from '@/lib/platform/db';
 import { notFound } from '@/lib/platform/http/errors';
 import type { ShopSettings } from '@/lib/units/settings';
+import type { ShopSettingsForm } from './schema';
 
 export type ShopDetails = InstanceType<typeof Shop>;
 
@@ -33,4 +34,28 @@ export async function getSettings(shopId: string): Promise<ShopSettings> {
 /** For the head of a page. */
 export async function shopName(shopId: string): Promise<string> {
   return withShop(shopId, async () => (await getShop(shopId)).name);
+}
+
+/** The settings form as it is opened, with the version it is based on. */
+export async function loadSettingsForm(shopId: string): Promise<ShopSettingsForm> {
+  return withShop(shopId, async () => {
+    const shop = await getShop(shopId);
+    return {
+      ...settingsOf(shop),
+      currency: shop.currency as ShopSettingsForm['currency'],
+      name: shop.name,
+      licenceNumber: shop.licenceNumber,
+      email: shop.email,
+      phone: shop.phone,
+      address: shop.address,
+      taxName: shop.taxName,
+      taxRatePct: String(Number(shop.taxRatePct)),
+      depositPct: String(Number(shop.depositPct)),
+      markupPct: String(Number(shop.markupPct)),
+      labourRate: String(Number(shop.labourRate)),
+      quoteValidDays: shop.quoteValidDays,
+      benchWork: shop.benchWork,
+      baseVersion: shop.version,
+    };
+  });
 }

@@ -8,12 +8,12 @@ import { SendPanel } from '@/components/quotes/send-panel';
 import { SentList } from '@/components/quotes/sent-list';
 import { TermsForm } from '@/components/quotes/terms-form';
 import { JobLine } from '@/components/job-line/job-line';
+import { jobLineSteps } from '@/components/jobs/steps';
 import { PageBody } from '@/components/shell/header';
 import { ButtonLink } from '@/components/ui/button';
 import { EmptyState, Sheet } from '@/components/ui/sheet';
 import { pageActor } from '@/lib/access/actor';
 import { canEditWork, canSendQuote } from '@/lib/access/policy';
-import { message, messageOr } from '@/lib/messages';
 import { deskQuote } from '@/lib/quotes/queries';
 import type { DeskDraft, DeskQuote } from '@/lib/quotes/schema/desk';
 import { formatDateTime, formatMoney } from '@/lib/units';
@@ -115,9 +115,11 @@ export default async function QuotePage({ params }: Props) {
   const { shop, job } = await params;
   const actor = await pageActor(shop, 'price:see');
   const quote = await found(deskQuote(actor, job));
-  const editable = canEditWork(actor);
-  const sends = canSendQuote(actor);
   const { draft, sent } = quote;
+  const accepted = sent.find((revision) => revision.acceptance !== null);
+  // What was accepted is changed by agreement, not by the next draft.
+  const editable = canEditWork(actor) && !accepted;
+  const sends = canSendQuote(actor) && !accepted;
   return (
     <PageBody
       title={quote.job.title}
@@ -129,14 +131,7 @@ export default async function QuotePage({ params }: Props) {
       }
     >
       <Sheet>
-        <JobLine
-          size="large"
-          steps={quote.steps.map((step) => ({
-            ...step,
-            label: message(`job.step.${step.key}`),
-            sub: step.waitsFor ? messageOr(`job.wait.${step.waitsFor}`, '') : undefined,
-          }))}
-        />
+        <JobLine size="large" steps={jobLineSteps(quote.steps)} />
       </Sheet>
       <div className="grid grid-cols-[minmax(0,1fr)] items-start gap-5 lg:grid-cols-[minmax(0,1fr)_26rem] lg:grid-rows-[auto_1fr]">
         {draft ? (
@@ -157,7 +152,13 @@ export default async function QuotePage({ params }: Props) {
         )}
         {sent.length > 0 ? (
           <Sheet title="Sent">
-            <SentList shopId={shop} jobId={job} sent={sent} settings={quote.settings} canSend={sends} />
+            <SentList
+              shopId={shop}
+              jobId={job}
+              sent={sent}
+              settings={quote.settings}
+              canSend={canSendQuote(actor)}
+            />
           </Sheet>
         ) : null}
       </div>
