@@ -47,7 +47,7 @@ async function start(children) {
   const demo = env.LAMPWRIGHT_DEMO === '1';
   if (demo && existsSync(script('seed.ts'))) {
     say('Filling the demo …');
-    await runScript(children, 'seed.ts', { ...env, LAMPWRIGHT_PROCESS: 'migrator', DEMO_FILE: DEMO });
+    await runScript(children, 'seed.ts', { ...env, DEMO_FILE: DEMO });
   }
   await buildOrStop(children, DIST);
   await startApp(children, { env, port: ports.app, distDir: DIST });

@@ -1,5 +1,5 @@
 /** The server figures again whatever is saved: its figures are the stored ones. */
-import { select } from '@/lib/platform/db';
+import { currentShopId, select } from '@/lib/platform/db';
 import { billOf } from '@/lib/circuits/schema/bill';
 import type { CircuitKind } from '@/lib/circuits/schema/electrical';
 import { figureCircuit } from '@/lib/circuits/schema/figure';
@@ -36,7 +36,7 @@ interface Figures {
 const UNFIGURED: Figures = { engineInput: null, answer: null, answeredAt: null, openStops: 1 };
 
 async function figuresOfCircuit(id: string, body: CircuitBody): Promise<Record<string, unknown>> {
-  const shop = await getShop((await select<{ id: string }>('select id from shops'))[0]?.id ?? '');
+  const shop = await getShop(currentShopId());
   if (body.kind === 'resistor-array' && !shop.benchWork)
     throw new AppError('invalid-input', 'Bench work is switched off in this shop.', [
       { path: 'kind', message: 'bench work is switched off in this shop' },
