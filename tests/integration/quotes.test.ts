@@ -1,5 +1,7 @@
+import { randomUUID } from 'node:crypto';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { addSource, bringUpToDate, moveLine, openDraft, removeLine, saveLine } from '@/lib/quotes/commands';
+import { composeQuote } from '@/lib/quotes/compose';
 import { deskQuote, draftState } from '@/lib/quotes/queries';
 import { closeDatabase, withShop } from '@/lib/platform/db';
 import { priceLines } from '@/lib/pricing/price-lines';
@@ -263,5 +265,48 @@ describe('who sees what', () => {
     await expect(deskQuote(other.owner, jobId, ports)).rejects.toMatchObject({ code: 'not-found' });
     await expect(saveLine(other.owner, typedLine(jobId))).rejects.toMatchObject({ code: 'not-found' });
     expect((await deskQuote(shop.owner, jobId, ports)).draft?.lines).toHaveLength(5);
+  });
+});
+
+describe('with the survey’s own queries', () => {
+  it('takes over change lines and circuits with the parts’ prices of today, and says which counts it assumes', async () => {
+    const jobId = await quoteJob(shop);
+    const id = () => randomUUID();
+    const [areaId, partId, oldId] = [id(), id(), id()];
+    const of = [shop.shopId, jobId, areaId];
+    await asMigrator(`insert into areas (shop_id, job_id, id, name) values ($1, $2, $3, 'Nave')`, of);
+    await asMigrator(
+      `insert into parts (shop_id, id, sku, kind, name, labour_hours) values ($1, $2, $3, 'luminaire', 'Flat panel', 0.5)`,
+      [shop.shopId, partId, partId],
+    );
+    for (const [cost, ago] of [
+      ['80', '2 days'],
+      ['92.5', '1 day'],
+      ['999', '-1 day'],
+    ])
+      await asMigrator(
+        `insert into part_prices (shop_id, part_id, unit_cost, currency, valid_from) values ($1, $2, $3, 'USD', now() - $4::interval)`,
+        [shop.shopId, partId, cost, ago],
+      );
+    await asMigrator(
+      `insert into existing_luminaires (shop_id, job_id, area_id, id, luminaire_type, quantity, count_confidence, watts)
+       values ($1, $2, $3, $4, 'four-tube fixture', 12, 'estimated', 112)`,
+      [...of, oldId],
+    );
+    await asMigrator(
+      `insert into change_lines (shop_id, job_id, area_id, existing_luminaire_id, action, old_quantity, new_part_id, new_quantity)
+       values ($1, $2, $3, $4, 'new-luminaire', 12, $5, 12)`,
+      [...of, oldId, partId],
+    );
+    await openDraft(shop.estimator, { jobId });
+    const state = await withShop(shop.shopId, () => draftState(shop.shopId, jobId));
+    expect(state?.lines).toMatchObject([
+      { source: 'change-line', areaName: 'Nave', unitCost: '1110.000000', unitLabourHours: '6.0000' },
+    ]);
+    expect(state?.blockers).toEqual([]);
+    const composed = await withShop(shop.shopId, () => composeQuote(shop.shopId, jobId, new Date()));
+    expect(composed?.content.assumedCounts).toEqual([
+      'Nave: 12 × four-tube fixture (not counted on site; a different count changes the price)',
+    ]);
   });
 });

@@ -18,6 +18,7 @@ import type {
   TermsInput,
 } from '../schema/forms';
 import type { DraftLine, DraftTerms, LineChange, PricedSource } from '../schema/lines';
+import { moved } from '../schema/order';
 import { pricedSources, type SourcePorts } from '../sources';
 import { fieldsFrom } from '../stale';
 
@@ -119,7 +120,8 @@ export async function saveLine(actor: AnyActor, input: LineInput): Promise<{ id:
       { ...after, version: baseVersion + 1 },
       { where: { id, version: baseVersion } },
     );
-    if (changed !== 1) throw conflict('Somebody else changed this line meanwhile. Both are shown.', before);
+    if (changed !== 1)
+      throw conflict('Somebody else changed this line meanwhile. Both are shown.', readableLine(before));
     await assertPriceable(jobId);
     await audit('quote.line-changed', { type: 'quote-line', id }, { before: { ...before }, after });
     return { id, version: baseVersion + 1 };
@@ -138,17 +140,13 @@ export async function removeLine(actor: AnyActor, input: LineRefInput): Promise<
   });
 }
 
-/** Changes places with the neighbour above or below; at the end of the list nothing moves. */
+/** Moves a line, or at the end of its area the whole area; at the end of the list nothing moves. */
 export async function moveLine(actor: AnyActor, input: MoveLineInput): Promise<{ id: string }> {
   return command(actor, async ({ audit }) => {
     const draft = await lockDraft(input.jobId);
     const lines = await linesOfDraft(draft.id);
-    const from = lines.findIndex((line) => line.id === input.id);
-    if (from < 0) throw notFound('This line');
-    const to = from + (input.direction === 'up' ? -1 : 1);
-    const order = lines.map((line) => line.id);
-    if (to >= 0 && to < order.length) order.splice(to, 0, ...order.splice(from, 1));
-    for (const [index, id] of order.entries())
+    if (!lines.some((line) => line.id === input.id)) throw notFound('This line');
+    for (const [index, id] of moved(lines, input.id, input.direction).entries())
       await run('update quote_lines set position = $2 where id = $1', [id, index + 1]);
     await audit('quote.line-moved', { type: 'quote-line', id: input.id }, { after: { to: input.direction } });
     return { id: input.id };
@@ -242,4 +240,13 @@ const readable = (draft: DraftTerms) => ({
   overheadPct: plainDecimal(draft.overheadPct),
   contingencyPct: plainDecimal(draft.contingencyPct),
   taxRatePct: plainDecimal(draft.taxRatePct),
+});
+
+const readableLine = (line: DraftLine) => ({
+  ...line,
+  quantity: plainDecimal(line.quantity),
+  unitCost: plainDecimal(line.unitCost),
+  unitLabourHours: plainDecimal(line.unitLabourHours),
+  labourRate: plainDecimal(line.labourRate),
+  markupPct: plainDecimal(line.markupPct),
 });

@@ -1,5 +1,6 @@
 /** What people type about quotes. The same schemas serve the forms, the actions and the routes. */
 import { z } from 'zod';
+import { pointed } from '@/lib/units/parsed';
 
 const DECIMAL = /^\d+(\.\d+)?$/;
 
@@ -9,7 +10,7 @@ function decimal(options: { whole: number; places: number; most?: number; what: 
   return z
     .string()
     .trim()
-    .transform((text) => text.replace(/^\./, '0.'))
+    .transform((text) => (pointed(text) ?? text).replace(/^\./, '0.'))
     .refine((text) => DECIMAL.test(text), `Type ${what} as a number, for example 12.50.`)
     .refine((text) => (text.split('.')[1] ?? '').length <= places, `At most ${places} decimals.`)
     .refine((text) => (text.split('.')[0] ?? '').replace(/^0+/, '').length <= whole, 'This is too large.')
