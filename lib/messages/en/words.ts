@@ -1,0 +1,22 @@
+/** The trade's words for what the engine names by a code, for use inside a sentence: `{ballast:word.ballast}`. */
+export const words = {
+  'word.ballast.magnetic': 'magnetic',
+  'word.ballast.instant-start': 'electronic, instant-start',
+  'word.ballast.rapid-start': 'electronic, rapid-start',
+  'word.ballast.programmed-start': 'electronic, programmed-start',
+  'word.ballast.none': 'none',
+  'word.ballast.unknown': 'not known',
+  'word.feeding.line': 'the supply itself',
+  'word.feeding.ballast': 'a ballast',
+  'word.feeding.driver': 'an LED driver',
+  'word.fed-end.single': 'one end',
+  'word.fed-end.double': 'both ends',
+  'word.control.switch': 'switch',
+  'word.control.sensor': 'sensor',
+  'word.control.contactor': 'contactor',
+  'word.control.step': 'step switch',
+  'word.control.phase-forward': 'forward-phase dimmer',
+  'word.control.phase-reverse': 'reverse-phase dimmer',
+  'word.control.0-10v': '0–10 V control',
+  'word.control.dali': 'DALI control',
+} as const;
