@@ -1,8 +1,10 @@
-/** Making, revoking and renewing customer links. All must run inside a command's transaction. */
+/** Making, closing and renewing customer links. */
+import { randomUUID } from 'node:crypto';
+import { type AnyActor, command } from '@/lib/access/command';
 import { currentShopId, run, select } from '@/lib/platform/db';
 import { notFound } from '@/lib/platform/http/errors';
-import { randomUUID } from 'node:crypto';
 import { findLink, type LinkRow } from './queries';
+import type { CloseLinkInput } from './schema';
 import { hashOfToken, tokenOf } from './token';
 
 async function idForContact(jobId: string, email: string): Promise<string | null> {
@@ -25,7 +27,7 @@ async function rekey(link: LinkRow): Promise<void> {
 const isDead = (link: LinkRow): boolean =>
   link.revokedAt !== null || (link.expiresAt !== null && link.expiresAt.getTime() <= Date.now());
 
-/** The one link of a job and a contact. One that was revoked or has expired gets a new key. */
+/** The one link of a job and a contact; one that was closed or has expired gets a new key. Inside a command. */
 export async function linkForContact(jobId: string, email: string): Promise<LinkRow> {
   const contact = email.trim().toLowerCase();
   const id = randomUUID();
@@ -42,9 +44,18 @@ export async function linkForContact(jobId: string, email: string): Promise<Link
   return (await findLink(link.id)) ?? link;
 }
 
-/** The link stops opening anything, at once. @throws {AppError} `not-found` */
-export async function revokeLink(id: string): Promise<void> {
-  const link = await findLink(id);
-  if (!link) throw notFound('This link');
-  await run('update customer_links set revoked_at = now() where id = $1', [id]);
+/** The link stops opening anything, at once. A new mail to the same contact makes a new key. */
+export async function closeLink(actor: AnyActor, input: CloseLinkInput): Promise<{ id: string }> {
+  return command(actor, async ({ audit }) => {
+    const link = await findLink(input.id);
+    if (link?.jobId !== input.jobId) throw notFound('This link');
+    await run('update customer_links set revoked_at = coalesce(revoked_at, now()) where id = $1', [link.id]);
+    await audit('link.closed', { type: 'link', id: link.id }, { after: { contactEmail: link.contactEmail } });
+    return { id: link.id };
+  });
+}
+
+/** A closed job's papers stay readable for two years. Called where the job is closed. */
+export async function expireLinksOfJob(jobId: string): Promise<void> {
+  await run(`update customer_links set expires_at = now() + interval '24 months' where job_id = $1`, [jobId]);
 }

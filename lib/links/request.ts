@@ -6,7 +6,8 @@ import { answer, assertSameOrigin } from '@/lib/access/route';
 import { takeAttempt } from '@/lib/platform/auth/limits';
 import { callerAddress } from '@/lib/platform/auth/options';
 import { env } from '@/lib/platform/env';
-import { AppError } from '@/lib/platform/http/errors';
+import { AppError, toAppError } from '@/lib/platform/http/errors';
+import { log } from '@/lib/platform/log';
 import { type CustomerVisit, type Visitor, visitorByToken } from './queries';
 
 export const LINK_COOKIE = 'lampwright-link';
@@ -39,11 +40,24 @@ export const visitorOfRequest = cache(async (linkId: string): Promise<Visitor | 
   return null;
 });
 
-/** Trades a token for a cookie and an address without it. A token that opens nothing leads to a page that says so. */
+async function visitorWithin(token: string): Promise<Visitor | 'closed' | 'wait'> {
+  try {
+    await takeAttempt('link-address', (await caller()).address);
+    return (await visitorByToken(token)) ?? 'closed';
+  } catch (error) {
+    log().warn({ error: toAppError(error).code }, 'a customer link could not be opened');
+    return 'wait';
+  }
+}
+
+/**
+ * Trades a token for a cookie and an address without it. A person stands before this answer: a token that opens
+ * nothing, too many tries and a database that is away each lead to a page that says what to do.
+ */
 export async function openLink(token: string): Promise<Response> {
-  await takeAttempt('link-address', (await caller()).address);
-  const visitor = await visitorByToken(token);
-  const to = `/l/${visitor?.link.id ?? 'closed'}`;
+  const found = await visitorWithin(token);
+  const visitor = typeof found === 'string' ? null : found;
+  const to = `/l/${typeof found === 'string' ? found : found.link.id}`;
   const response = new Response(null, { status: 303, headers: { ...PRIVATE_HEADERS, location: to } });
   if (visitor) {
     const secure = env().APP_URL.startsWith('https:') ? '; Secure' : '';

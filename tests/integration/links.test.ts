@@ -1,5 +1,5 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { linkForContact, revokeLink } from '@/lib/links/commands';
+import { closeLink, expireLinksOfJob, linkForContact } from '@/lib/links/commands';
 import { type LinkRow, linksOfJob, linkUrl, visitorByToken } from '@/lib/links/queries';
 import { hashOfToken, tokenOf } from '@/lib/links/token';
 import { closeDatabase, run, select, withShop } from '@/lib/platform/db';
@@ -54,12 +54,12 @@ describe('a customer link', () => {
     expect(await visitorByToken(tokenOf(shop.shopId, 1))).toBeNull();
   });
 
-  it('opens nothing once revoked; asked for again it gets a new key and the old one stays dead', async () => {
-    const row = await link('revoked@example.com');
+  it('opens nothing once closed; asked for again it gets a new key and the old one stays dead', async () => {
+    const row = await link('closed@example.com');
     const old = tokenIn(row);
-    await withShop(shop.shopId, () => revokeLink(row.id));
+    await closeLink(shop.office, { jobId, id: row.id });
     expect(await visitorByToken(old)).toBeNull();
-    const again = await link('revoked@example.com');
+    const again = await link('closed@example.com');
     expect(again.id).toBe(row.id);
     expect(await visitorByToken(old)).toBeNull();
     expect(await visitorByToken(tokenIn(again))).toMatchObject({ link: { id: row.id } });
@@ -73,11 +73,20 @@ describe('a customer link', () => {
     expect(await visitorByToken(tokenIn(row))).toBeNull();
   });
 
-  it('is not seen, found or revoked by another shop', async () => {
+  it('outlives its job’s closing by two years', async () => {
+    const row = await link('years@example.com');
+    await withShop(shop.shopId, () => expireLinksOfJob(jobId));
+    expect(await visitorByToken(tokenIn(row))).not.toBeNull();
+    const [again] = await withShop(shop.shopId, () => linksOfJob(jobId));
+    const months = ((again?.expiresAt?.getTime() ?? 0) - Date.now()) / (30.44 * 24 * 3600 * 1000);
+    expect(months).toBeCloseTo(24, 0);
+  });
+
+  it('is not seen, found or closed by another shop', async () => {
     const row = await link('mine@example.com');
     const other = await quoteShop('Marlpit Electric');
     expect(await withShop(other.shopId, () => linksOfJob(jobId))).toEqual([]);
-    await expect(withShop(other.shopId, () => revokeLink(row.id))).rejects.toMatchObject({
+    await expect(closeLink(other.owner, { jobId, id: row.id })).rejects.toMatchObject({
       code: 'not-found',
     });
     await expect(withShop(other.shopId, () => linkForContact(jobId, 'x@example.com'))).rejects.toMatchObject({

@@ -1,10 +1,11 @@
 import type { Metadata } from 'next';
-import { notFound } from 'next/navigation';
+import { notFound, redirect } from 'next/navigation';
 import { OpenedBeacon } from '@/components/customer/beacon';
 import { CustomerQuote } from '@/components/customer/quote-page';
 import { Band } from '@/components/customer/section';
 import { visitorOfRequest } from '@/lib/links/request';
 import { message } from '@/lib/messages';
+import { toAppError } from '@/lib/platform/http/errors';
 import { customerView } from '@/lib/quotes/queries';
 
 interface Props {
@@ -12,7 +13,10 @@ interface Props {
 }
 
 async function viewOf(link: string) {
-  const visitor = await visitorOfRequest(link);
+  const visitor = await visitorOfRequest(link).catch((error: unknown) => {
+    if (toAppError(error).code === 'too-many') redirect('/l/wait');
+    throw error;
+  });
   if (!visitor) notFound();
   return customerView(visitor.shopId, visitor.link.jobId);
 }

@@ -77,6 +77,10 @@ export const quotes = {
   'customer.state.superseded': 'Replaced',
   'customer.nothing-yet':
     'There is nothing to read here yet. When the shop sends you a quote, it stands here.',
+  'customer.wait-page': 'Your quote can not be opened just now',
+  'customer.wait-page.why':
+    'Either too many links were tried from your address, or our server needs a moment.',
+  'customer.wait-page.do': 'Wait ten minutes, then use the link in the mail again.',
   'customer.link-closed': 'This link no longer opens anything',
   'customer.link-closed.why':
     'It may be incomplete, it may have been replaced by a newer one, or the shop may have closed it.',

@@ -1,6 +1,7 @@
 /** The quote page of the desk: what the asker may see, and nothing beside it. */
 import { type Actor, canSeeCost } from '@/lib/access/policy';
 import { getJob } from '@/lib/jobs/queries';
+import { type LinkRow, linksOfJob } from '@/lib/links/queries';
 import { withShop } from '@/lib/platform/db';
 import { getShop, settingsOf } from '@/lib/shops/queries';
 import type { LineCheck } from '../blockers';
@@ -124,6 +125,12 @@ function sentOf(quote: SentQuote, content: QuoteContent): DeskSent {
   };
 }
 
+const linkFor = (link: LinkRow) => ({
+  id: link.id,
+  email: link.contactEmail,
+  open: link.revokedAt === null && (link.expiresAt === null || link.expiresAt.getTime() > Date.now()),
+});
+
 /** @throws {AppError} `not-found` */
 export function deskQuote(actor: Actor, jobId: string, ports: SourcePorts = livePorts): Promise<DeskQuote> {
   const { shopId } = actor;
@@ -139,6 +146,7 @@ export function deskQuote(actor: Actor, jobId: string, ports: SourcePorts = live
       steps,
       draft: composed ? await draftOf(shopId, composed, canSeeCost(actor)) : null,
       sent,
+      links: (await linksOfJob(jobId)).map(linkFor),
     };
   });
 }

@@ -88,4 +88,6 @@ export interface DeskQuote {
   steps: { key: CustomerStep['key']; state: CustomerStep['state']; waitsFor: string | null }[];
   draft: DeskDraft | null;
   sent: DeskSent[];
+  /** Who holds a key to the customer's page. */
+  links: { id: string; email: string; open: boolean }[];
 }

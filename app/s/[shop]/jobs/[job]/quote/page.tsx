@@ -5,6 +5,7 @@ import { Blockers, DraftTotals } from '@/components/quotes/draft-side';
 import { BringUpToDate, OpenDraft, UnusedSources } from '@/components/quotes/draft-tools';
 import { LineForm } from '@/components/quotes/line-form';
 import { SendPanel } from '@/components/quotes/send-panel';
+import { LinkList } from '@/components/quotes/link-list';
 import { SentList } from '@/components/quotes/sent-list';
 import { TermsForm } from '@/components/quotes/terms-form';
 import { JobLine } from '@/components/job-line/job-line';
@@ -159,6 +160,7 @@ export default async function QuotePage({ params }: Props) {
               settings={quote.settings}
               canSend={canSendQuote(actor)}
             />
+            <LinkList shopId={shop} jobId={job} links={quote.links} />
           </Sheet>
         ) : null}
       </div>
