@@ -37,6 +37,10 @@ const texts: Readonly<Record<string, string>> = catalogue;
 
 export const catalogueKeys = Object.keys(catalogue) as MessageKey[];
 
+/** The text as it stands, placeholders and all. */
+export const messageText = (key: string): string | undefined =>
+  Object.hasOwn(texts, key) ? texts[key] : undefined;
+
 export const hasMessage = (key: string): key is MessageKey => Object.hasOwn(texts, key);
 
 /** In a sentence 277 V is not 277.00 V. */

@@ -101,9 +101,6 @@ describe('message', () => {
 
   it('speaks plainly: no straight quotes, nothing invalid', () => {
     for (const key of catalogueKeys)
-      expect([key, message(key)]).toEqual([
-        key,
-        expect.not.stringMatching(/['"]|invalid/i),
-      ]);
+      expect([key, message(key)]).toEqual([key, expect.not.stringMatching(/['"]|invalid/i)]);
   });
 });
