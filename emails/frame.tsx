@@ -21,7 +21,14 @@ const PLATE_FACE = "'Sofia Sans Extra Condensed', 'Arial Narrow', 'DejaVu Sans C
 const text: CSSProperties = { color: INK, fontSize: '16px', lineHeight: '1.5', margin: '0 0 14px' };
 
 export function MailText({ children, second = false }: { children: ReactNode; second?: boolean }) {
-  return <Text style={second ? { ...text, color: INK_2, fontSize: '14px' } : text}>{children}</Text>;
+  const quiet = {
+    ...text,
+    color: INK_2,
+    fontSize: '14px',
+    overflowWrap: 'anywhere',
+    wordBreak: 'break-word',
+  } as const;
+  return <Text style={second ? quiet : text}>{children}</Text>;
 }
 
 export function MailPlate({ children }: { children: string }) {

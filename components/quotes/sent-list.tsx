@@ -29,7 +29,7 @@ function Events({ sent, settings }: { sent: DeskSent; settings: ShopSettings }) 
   return (
     <ol className="mt-2 flex flex-col gap-1 text-[0.95rem]">
       {sent.events.map((event) => (
-        <li key={event.id} className="grid grid-cols-[auto_1fr] gap-x-3">
+        <li key={event.id} className="grid gap-x-3 sm:grid-cols-[auto_1fr]">
           <time dateTime={event.at.toISOString()} className="font-mono text-ink-2">
             {formatDateTime(event.at, settings)}
           </time>

@@ -1,5 +1,6 @@
 import type { Metadata } from 'next';
 import { notFound, redirect } from 'next/navigation';
+import { cache } from 'react';
 import { OpenedBeacon } from '@/components/customer/beacon';
 import { CustomerQuote } from '@/components/customer/quote-page';
 import { Band } from '@/components/customer/section';
@@ -12,14 +13,15 @@ interface Props {
   params: Promise<{ link: string }>;
 }
 
-async function viewOf(link: string) {
+/** Once for title and page together. */
+const viewOf = cache(async (link: string) => {
   const visitor = await visitorOfRequest(link).catch((error: unknown) => {
     if (toAppError(error).code === 'too-many') redirect('/l/wait');
     throw error;
   });
   if (!visitor) notFound();
   return customerView(visitor.shopId, visitor.link.jobId);
-}
+});
 
 export async function generateMetadata({ params }: Props): Promise<Metadata> {
   const { link } = await params;

@@ -24,12 +24,16 @@ const ACCEPTANCE = `
   a.id, a.document_id as "documentId", a.method, a.name, a.choices, a.total_minor as "totalMinor", a.currency,
   a.shown_text as "shownText", a.sha256, coalesce(a.canonical::jsonb ->> 'reference', '') as reference, a.at`;
 
-export async function acceptanceOf(documentId: string): Promise<AcceptanceRow | null> {
+async function acceptancesOf(documentIds: string[]): Promise<Map<string, AcceptanceRow>> {
   const rows = await select<AcceptanceRow>(
-    `select ${ACCEPTANCE} from acceptances a where a.document_id = $1`,
-    [documentId],
+    `select ${ACCEPTANCE} from acceptances a where a.document_id = any ($1::uuid[])`,
+    [documentIds],
   );
-  return rows[0] ?? null;
+  return new Map(rows.map((row) => [row.documentId, row]));
+}
+
+export async function acceptanceOf(documentId: string): Promise<AcceptanceRow | null> {
+  return (await acceptancesOf([documentId])).get(documentId) ?? null;
 }
 
 /** The acceptance that the job's work rests on, with its revision. */
@@ -59,24 +63,23 @@ export interface SentQuote {
   acceptance: AcceptanceRow | null;
 }
 
-async function describe(document: DocumentRow, events: EventRow[], today: string): Promise<SentQuote> {
-  return {
-    document,
-    events,
-    state: stateOf(events, document.validUntil, today),
-    acceptance: await acceptanceOf(document.id),
-  };
-}
-
-/** The newest first. */
+/** The newest first; a fixed number of statements however many revisions there are. */
 export async function sentQuotes(shopId: string, jobId: string): Promise<SentQuote[]> {
   const { timeZone } = await getSettings(shopId);
   const today = dayIn(timeZone, new Date());
   const documents = await documentsOfJob(jobId, 'quote');
-  const events = await eventsOf(documents.map((document) => document.id));
-  const sent: SentQuote[] = [];
-  for (const document of documents) sent.push(await describe(document, events.get(document.id) ?? [], today));
-  return sent;
+  const ids = documents.map((document) => document.id);
+  const events = await eventsOf(ids);
+  const acceptances = await acceptancesOf(ids);
+  return documents.map((document) => {
+    const own = events.get(document.id) ?? [];
+    return {
+      document,
+      events: own,
+      state: stateOf(own, document.validUntil, today),
+      acceptance: acceptances.get(document.id) ?? null,
+    };
+  });
 }
 
 export interface QuoteForReader extends SentQuote {
