@@ -1,7 +1,7 @@
 /**
  * The message catalogue: every text of the customer's pages, the crew's sheet, findings, working and mails by its
  * key. Numbers in values are formatted by lib/units with the unit that the placeholder names: `{drop:V}`; codes are
- * put in the trade's words: `{ballast:word.ballast}`.
+ * put in the trade's words: `{ballast:word.ballast}`; words that differ between the bases are chosen: `{=fixture}`.
  */
 import { formatFigure, formatNumber } from '@/lib/units/figures';
 import { formatMoney } from '@/lib/units/money';
@@ -16,6 +16,9 @@ import { people } from './en/people';
 import { quotes } from './en/quotes';
 import { words } from './en/words';
 import { working } from './en/working';
+import { fillTerms } from './terms';
+
+export { term } from './terms';
 
 const catalogue = {
   ...quotes,
@@ -75,7 +78,7 @@ export function message(
   values: MessageValues = {},
   settings: ShopSettings = DEFAULT_SETTINGS,
 ): string {
-  return choosePlurals(texts[key] ?? key, values).replace(
+  return choosePlurals(fillTerms(texts[key] ?? key, settings), values).replace(
     /\{([\w-]+)(?::([^}]+))?\}/g,
     (_, name: string, unit: string | undefined) => render(values[name], unit, settings),
   );

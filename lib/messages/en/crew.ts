@@ -6,9 +6,9 @@ export const crew = {
   'crew.caution.dead.find':
     'Find every supply: switched, unswitched and emergency feeds, a second circuit, battery pack, control pair.',
   'crew.caution.dead.neutral':
-    'A shared neutral can be live with your breaker off: do not open it until every circuit on it is locked.',
+    'A shared neutral can be live with your {=breaker} off: do not open it until every circuit on it is locked.',
   'crew.caution.dead.prove':
-    'Isolate all, lock and tag, prove the tester, test line to neutral, line to earth, neutral to earth (and line to line), prove the tester again. Let capacitors discharge; unplug the battery. Qualified persons only.',
+    'Isolate all, lock and tag, prove the tester, test line to neutral, line to {=ground}, neutral to {=ground} (and line to line), prove the tester again. Let capacitors discharge; unplug the battery. Qualified persons only.',
   'crew.caution.live.title': 'Readings are live work',
   'crew.caution.live.how':
     'Qualified person, protective equipment, rated meter. De-energise, connect meter or clamp, energise, read, de-energise.',
@@ -16,7 +16,7 @@ export const crew = {
     'Never open a running constant-current string: its driver rises to open-circuit volts, and reconnecting it live destroys LEDs.',
   'crew.caution.live.mains':
     'Mains-side readings are asked only of crew marked qualified for them; others record “not measured”. Disconnect drivers before an insulation test.',
-  'crew.caution.lampholder': 'Where lampholders are rewired, the modification label stays in the fixture.',
+  'crew.caution.lampholder': 'Where lampholders are rewired, the modification label stays in the {=fixture}.',
   'crew.caution.ballast':
     'Old ballasts without a “No PCBs” mark are suspect: do not open them; keep them apart.',
   'crew.caution.lamps': 'Old lamps hold mercury: carry them whole, box them, keep the recycling certificate.',

@@ -2,13 +2,13 @@
 export const retrofitFindings = {
   'finding.product-missing.title': 'Nothing chosen yet',
   'finding.product-missing.body':
-    'Choose the lamp, kit or luminaire that goes in; the check starts from its sheet.',
+    'Choose the lamp, kit or {=fixture} that goes in; the check starts from its sheet.',
   'finding.supply-outside-rating.title': 'Supply outside the rating',
   'finding.supply-outside-rating.body':
     '{supplyVolts:V} is outside the {ratedVoltsMin:V} to {ratedVoltsMax:V} that the product is rated for. Choose one that is rated for this supply.',
   'finding.supply-unknown.title': 'Supply volts not known',
   'finding.supply-unknown.body':
-    'The product takes {ratedVoltsMin:V} to {ratedVoltsMax:V}. Measure at the luminaire, or read it at the panel, before anything is ordered.',
+    'The product takes {ratedVoltsMin:V} to {ratedVoltsMax:V}. Measure at the {=fixture}, or read it at the {=panel}, before anything is ordered.',
   'finding.rated-volts-missing.title': 'Rated volts not given',
   'finding.rated-volts-missing.body':
     'The supply volts that the product is rated for are not known. Read them on its sheet and enter them under parts and prices.',
@@ -20,7 +20,7 @@ export const retrofitFindings = {
     'Without its type (A, B, A-B or C) the wiring can not be said. Read it on the lamp’s sheet and enter it.',
   'finding.ballast-unknown.title': 'Ballast not known',
   'finding.ballast-unknown.body':
-    'The lamp runs on the ballast that stays. Open one luminaire of this type and read it.',
+    'The lamp runs on the ballast that stays. Open one {=fixture} of this type and read it.',
   'finding.ballast-not-listed.title': 'Ballast not on the maker’s list',
   'finding.ballast-not-listed.body':
     'The maker of the tube does not name this ballast ({ballast:word.ballast}): the tube dims, flickers or fails. Choose a tube that lists it, or bypass the ballast.',
@@ -40,7 +40,7 @@ export const retrofitFindings = {
     'Not known whether the tube is fed at one end or at both; the wiring follows from it. Read it on the tube’s sheet.',
   'finding.fed-end-unknown.title': 'Present wiring not known',
   'finding.fed-end-unknown.body':
-    'The tube is fed at {fedEnd:word.fed-end}. Read the label in the luminaire, open one and look, before lamps are ordered.',
+    'The tube is fed at {fedEnd:word.fed-end}. Read the label in the {=fixture}, open one and look, before lamps are ordered.',
   'finding.fed-end-mismatch.title': 'Wired for another tube',
   'finding.fed-end-mismatch.body':
     'The lampholders are wired to feed at {wired:word.fed-end}, the tube at {fedEnd:word.fed-end}. Choose a tube that fits the wiring, or rewire as a bypass line.',
@@ -55,10 +55,10 @@ export const retrofitFindings = {
     'This product is not listed and can not be sold as building lighting. Choose a listed one.',
   'finding.kit-instructions.title': 'By the kit’s own instructions',
   'finding.kit-instructions.body':
-    'The listing holds only when the kit is fitted as its instructions say, in a luminaire that they name. Keep them with the job.',
+    'The listing holds only when the kit is fitted as its instructions say, in a {=fixture} that they name. Keep them with the job.',
   'finding.emergency-unknown.title': 'Emergency light not looked for',
   'finding.emergency-unknown.body':
-    'Not known whether there is an emergency pack or an unswitched night light. Look in the luminaire and on the drawing before the work is planned.',
+    'Not known whether there is an emergency pack or an unswitched night light. Look in the {=fixture} and on the drawing before the work is planned.',
   'finding.emergency-on-switched-feed.title': 'Emergency unit on a switched feed',
   'finding.emergency-on-switched-feed.body':
     'Behind a switch or sensor the unit takes every switch-off for a power cut, or never charges. Give it the unswitched feed.',
@@ -100,16 +100,16 @@ export const retrofitFindings = {
     'The negative of a 0–10 V pair is gray in old stock and pink in new, and gray can be a 277 V neutral. Test, do not guess.',
   'finding.step-switching.title': 'Two-step switching',
   'finding.step-switching.body':
-    'Two switches light this room in steps. Spread the new luminaires over both legs, or say in the quote that the steps are lost.',
+    'Two switches light this room in steps. Spread the new {=fixture}s over both legs, or say in the quote that the steps are lost.',
   'finding.breaker-overloaded.title': 'Breaker loaded too far',
   'finding.breaker-overloaded.body':
-    'The circuit would draw {ampsAfter:A}, and with {factor} times for continuous load that is more than the {breakerAmps:A} breaker. Split it, or choose less load.',
+    'The circuit would draw {ampsAfter:A}, and with {factor} times for continuous load that is more than the {breakerAmps:A} {=breaker}. Split it, or choose less load.',
   'finding.inrush-over-breaker.title': 'Trips at switch-on',
   'finding.inrush-over-breaker.body':
-    '{units} units start at once on a breaker that holds {unitsByInrush}. Split them over circuits, or choose a driver with less inrush.',
+    '{units} units start at once on one {=breaker} that holds {unitsByInrush}. Split them over circuits, or choose a driver with less inrush.',
   'finding.inrush-not-checked.title': 'Inrush not checked',
   'finding.inrush-not-checked.body':
-    'The maker’s figure is missing. Ask for the most units on this breaker before {units, plural, one {it is} other {all # are}} ordered.',
+    'The maker’s figure is missing. Ask for the most units on this {=breaker} before {units, plural, one {it is} other {all # are}} ordered.',
   'finding.inrush-over-control.title': 'Too much inrush for the control',
   'finding.inrush-over-control.body':
     '{inrushAmps:A} at switch-on through a control rated for {ratedInrushAmps:A}: its contacts weld. Add a relay, or share the load.',
@@ -118,29 +118,29 @@ export const retrofitFindings = {
     'Compare the inrush of all drivers with the listed rating of the {control:word.control}.',
   'finding.disconnect-missing.title': 'No means to disconnect',
   'finding.disconnect-missing.body':
-    'The luminaire has no means to disconnect it for service. Add one with this work, and price it.',
+    'The {=fixture} has no means to disconnect it for service. Add one with this work, and price it.',
   'finding.disconnect-unknown.title': 'Means to disconnect not known',
   'finding.disconnect-unknown.body':
-    'Look whether the luminaire can be disconnected for service. Price a disconnect where it can not.',
+    'Look whether the {=fixture} can be disconnected for service. Price a disconnect where it can not.',
   'finding.shared-neutral.title': 'Shared neutral',
   'finding.shared-neutral.body':
-    'The neutral can be live with this breaker off. Do not open it until every circuit on it is locked.',
+    'The neutral can be live with this {=breaker} off. Do not open it until every circuit on it is locked.',
   'finding.shared-neutral-unknown.title': 'Shared neutral not ruled out',
   'finding.shared-neutral-unknown.body':
-    'A shared neutral can be live with this breaker off. Take it for one until it has been traced: lock every circuit that may be on it.',
+    'A shared neutral can be live with this {=breaker} off. Take it for one until it has been traced: lock every circuit that may be on it.',
   'finding.suspect-ballast.title': 'Suspect ballasts',
   'finding.suspect-ballast.body':
     'Ballasts without a “No PCBs” mark are taken to hold PCBs. Keep them whole and apart, price their disposal, keep the papers.',
   'finding.suspect-ceiling.title': 'Suspect ceiling',
   'finding.suspect-ceiling.body':
     'The ceiling may hold asbestos. No drilling or lifting until it has been cleared in writing.',
-  'finding.no-equipment-ground.title': 'No equipment ground',
+  'finding.no-equipment-ground.title': 'No equipment {=ground}',
   'finding.no-equipment-ground.body':
-    'Metal parts must be bonded before the luminaire goes back into service. Price the ground with this work.',
+    'Metal parts must be bonded before the {=fixture} goes back into service. Price the {=ground} with this work.',
   'finding.aluminium-conductors.title': 'Aluminium conductors',
   'finding.aluminium-conductors.body':
     'Use connectors that are rated for aluminium to copper, and price them.',
-  'finding.old-wire.title': 'Old wire above the luminaires',
+  'finding.old-wire.title': 'Old wire above the {=fixture}s',
   'finding.old-wire.body':
     'The supply wire here is of an old 60 °C kind. Check what the new product asks for, and price new wire where it asks for more.',
 } as const;

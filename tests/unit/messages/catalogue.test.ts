@@ -1,6 +1,7 @@
 /** The catalogue: a text for all that the engine can say, filled in the shop's units, in the trade's words. */
 import { describe, expect, it } from 'vitest';
-import { catalogueKeys, hasMessage, message, type MessageKey, messageOr } from '@/lib/messages';
+import { catalogueKeys, hasMessage, message, type MessageKey, messageOr, term } from '@/lib/messages';
+import { fillTerms } from '@/lib/messages/terms';
 import { DEFAULT_SETTINGS } from '@/lib/units';
 import { engineCodes } from '../../support/engine-codes';
 
@@ -69,6 +70,20 @@ describe('message', () => {
     expect(message('finding.ballast-not-listed.body', { ballast: 'of a new kind' })).toContain(
       '(of a new kind)',
     );
+  });
+
+  it('uses the words of the shop’s basis', () => {
+    const iec = { ...DEFAULT_SETTINGS, basis: 'iec' } as const;
+    expect(message('finding.supply-unknown.body', {}, DEFAULT_SETTINGS)).toContain(
+      'at the fixture, or read it at the panel',
+    );
+    expect(message('finding.supply-unknown.body', {}, iec)).toContain(
+      'at the luminaire, or read it at the distribution board',
+    );
+    expect(message('crew.caution.dead.prove', {}, iec)).toContain('line to earth');
+    expect(term('closeout', iec)).toBe('handover');
+    expect(fillTerms('{=Lift} and {=lift}', DEFAULT_SETTINGS)).toBe('Lift and lift');
+    expect(fillTerms('{=nothing}', iec)).toBe('{=nothing}');
   });
 
   it('counts in English', () => {
