@@ -24,11 +24,12 @@ export function spread(total: Decimal, weights: readonly Decimal[]): Decimal[] {
   const sum = weights.reduce((a, b) => a.plus(b), new Exact(0));
   if (weights.length === 0) return [];
   if (sum.isZero()) return weights.map((_, index) => (index === 0 ? total : new Exact(0)));
-  const exact = weights.map((weight) => total.times(weight).div(sum));
-  const parts = exact.map((share) => share.floor());
+  // Whole quotients and remainders, not fractions: a third is a tie with a third, whatever stands before the point.
+  const products = weights.map((weight) => total.times(weight));
+  const parts = products.map((product) => product.divToInt(sum));
   const left = total.minus(parts.reduce((a, b) => a.plus(b), new Exact(0))).toNumber();
-  const order = exact
-    .map((share, index) => ({ index, rest: share.minus(share.floor()) }))
+  const order = products
+    .map((product, index) => ({ index, rest: product.mod(sum) }))
     .sort((a, b) => b.rest.cmp(a.rest) || a.index - b.index);
   for (const { index } of order.slice(0, left)) parts[index] = (parts[index] ?? new Exact(0)).plus(1);
   return parts;
