@@ -1,7 +1,7 @@
 'use client';
 /** The part of a quote that a customer answers: additions, the total that follows, and the signature. */
 import { type ReactNode, useMemo, useState } from 'react';
-import { quoteMessage as message } from '@/lib/messages/quotes';
+import { customerMessage as message } from '@/lib/messages/quotes';
 import { acceptText } from '@/lib/quotes/schema/accept-text';
 import { defaultChoices, type QuoteContent } from '@/lib/quotes/schema/content';
 import { totalsOf } from '@/lib/quotes/schema/totals';

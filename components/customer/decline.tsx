@@ -4,7 +4,7 @@ import { type FormEvent, useState } from 'react';
 import { Button } from '@/components/ui/button';
 import { TextArea } from '@/components/ui/field';
 import { Notice } from '@/components/ui/sheet';
-import { quoteMessage as message } from '@/lib/messages/quotes';
+import { customerMessage as message } from '@/lib/messages/quotes';
 import { postAnswer } from './send';
 import { useHydrated } from './use-hydrated';
 

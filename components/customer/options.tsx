@@ -1,5 +1,5 @@
 import type { ReactNode } from 'react';
-import { quoteMessage as message } from '@/lib/messages/quotes';
+import { customerMessage as message } from '@/lib/messages/quotes';
 import type { ContentOption, QuoteContent } from '@/lib/quotes/schema/content';
 import { formatMoney } from '@/lib/units/money';
 import { Band } from './section';

@@ -1,4 +1,4 @@
-import { quoteMessage as message } from '@/lib/messages/quotes';
+import { customerMessage as message } from '@/lib/messages/quotes';
 import type { QuoteContent, QuoteTotals } from '@/lib/quotes/schema/content';
 import { totalRows } from '@/lib/quotes/schema/present';
 import { Band, PriceRow } from './section';

@@ -1,11 +1,11 @@
 /**
- * The quote's own texts without the rest of the catalogue: what a customer's page loads. They hold plain
- * placeholders only, without units, plurals or the trade's pairs of words.
+ * The customer's texts without the rest of the catalogue: what their page loads. They hold plain placeholders
+ * only, without units, plurals or the trade's pairs of words.
  */
 import { quotes } from './en/quotes';
 
-export type QuoteKey = keyof typeof quotes;
+export type CustomerKey = Extract<keyof typeof quotes, `customer.${string}`>;
 
-export function quoteMessage(key: QuoteKey, values: Record<string, string | number> = {}): string {
+export function customerMessage(key: CustomerKey, values: Record<string, string | number> = {}): string {
   return quotes[key].replace(/\{(\w+)\}/g, (_, name: string) => String(values[name] ?? '–'));
 }

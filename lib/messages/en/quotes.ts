@@ -110,7 +110,8 @@ export const quotes = {
     '“{line}” is no longer in the survey. Bring the draft up to date, or take the line out.',
   'quote.blocker.out-of-date':
     '“{line}” is out of date: its source or its price has changed. Bring the draft up to date.',
-  'quote.blocker.no-price': '“{line}” uses a part that has no price yet. Give it one in parts and prices.',
+  'quote.blocker.no-price':
+    '“{line}” uses {count} {count, plural, one {part} other {parts}} without a price.',
   'quote.blocker.accepted':
     'The customer has accepted revision {revision}. Changes to it need their own agreement; this draft can not replace it.',
   'mail.quote-sent.subject': 'Your quote {number} from {shop}: {title}',

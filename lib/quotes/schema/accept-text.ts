@@ -2,7 +2,7 @@
  * The exact words a customer agrees to. The page fills the template as the reader chooses, the server fills it
  * again when they sign, and what was shown is kept with the acceptance.
  */
-import { quoteMessage as message } from '@/lib/messages/quotes';
+import { customerMessage as message } from '@/lib/messages/quotes';
 import { formatMoney } from '@/lib/units/money';
 import type { QuoteContent, QuoteTotals } from './content';
 

@@ -1,5 +1,5 @@
 /** The rows under a quote, as page, PDF and mail show them. */
-import { quoteMessage as message } from '@/lib/messages/quotes';
+import { customerMessage as message } from '@/lib/messages/quotes';
 import { formatMoney } from '@/lib/units/money';
 import type { QuoteContent, QuoteTotals } from './content';
 
