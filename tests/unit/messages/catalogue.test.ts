@@ -1,6 +1,7 @@
 /** The catalogue: a text for all that the engine can say, filled in the shop's units, in the trade's words. */
 import { describe, expect, it } from 'vitest';
 import { catalogueKeys, hasMessage, message, type MessageKey, messageOr, term } from '@/lib/messages';
+import { message as customerMessage } from '@/lib/messages/customer';
 import { fillTerms } from '@/lib/messages/terms';
 import { DEFAULT_SETTINGS } from '@/lib/units';
 import { engineCodes } from '../../support/engine-codes';
@@ -84,6 +85,10 @@ describe('message', () => {
     expect(term('closeout', iec)).toBe('handover');
     expect(fillTerms('{=Lift} and {=lift}', DEFAULT_SETTINGS)).toBe('Lift and lift');
     expect(fillTerms('{=nothing}', iec)).toBe('{=nothing}');
+  });
+
+  it('says the same from the customer’s own part of it', () => {
+    expect(customerMessage('customer.for')).toBe(message('customer.for'));
   });
 
   it('counts in English', () => {
