@@ -13,6 +13,15 @@ import type {
  */
 export type Feeding = 'line' | 'ballast' | 'driver' | 'own' | 'none';
 
+export type TubeType = NonNullable<Product['tubeType']>;
+
+/** The tube types that each way of feeding can run. */
+export const TUBE_RUNS: Record<'line' | 'ballast' | 'driver', readonly TubeType[]> = {
+  line: ['B', 'A-B'],
+  ballast: ['A', 'A-B'],
+  driver: ['C'],
+};
+
 export interface RetrofitCase {
   input: RetrofitCheckInput;
   existing: Existing;
@@ -75,4 +84,10 @@ export function retrofitCase(input: RetrofitCheckInput): RetrofitCase {
     feeding: feedingOf(input, existing),
     hazard: (name) => input.hazards?.[name] ?? 'unknown',
   };
+}
+
+/** A tube that can't run on what feeds it has no wiring, no lampholders and no label to speak of. */
+export function tubeIsWrong({ product, feeding }: RetrofitCase): boolean {
+  if (!product?.tubeType || feeding === 'own' || feeding === 'none') return false;
+  return !TUBE_RUNS[feeding].includes(product.tubeType);
 }

@@ -5,21 +5,12 @@
  */
 import { caution, hardStop, note, softStop } from '@/lib/engine/finding';
 import type { Finding } from '@/lib/engine/contract';
-import type { RetrofitCase } from './retrofit-check-case';
+import { type RetrofitCase, TUBE_RUNS, type TubeType } from './retrofit-check-case';
 import type { Product } from './retrofit-check-input';
 
 const TYPES =
   'UL 1993 and UL 1598C tube types, read in maker guides; the maker’s instruction for the tube governs';
 const PRACTICE = 'common practice';
-
-type TubeType = NonNullable<Product['tubeType']>;
-
-/** The types that each way of feeding can run. */
-const RUNS: Record<'line' | 'ballast' | 'driver', readonly TubeType[]> = {
-  line: ['B', 'A-B'],
-  ballast: ['A', 'A-B'],
-  driver: ['C'],
-};
 
 const WHY: Record<'line' | 'ballast' | 'driver', string> = {
   line: 'The lampholders carry the supply: only a Type B or A-B tube can stand it.',
@@ -32,7 +23,7 @@ function typeAgainstFeeding(
   feeding: 'line' | 'ballast' | 'driver',
   type: TubeType,
 ): Finding[] {
-  if (RUNS[feeding].includes(type)) return [];
+  if (TUBE_RUNS[feeding].includes(type)) return [];
   return [
     hardStop(
       'tube-type-against-ballast',

@@ -2,7 +2,7 @@
 import { defineCalculation, type Finding, type Outcome, type WorkingStep } from '@/lib/engine/contract';
 import { softStop } from '@/lib/engine/finding';
 import { breakerFigures, type BreakerFigures, breakerFindings } from './retrofit-check-breaker';
-import { type RetrofitCase, retrofitCase, takesProduct } from './retrofit-check-case';
+import { type RetrofitCase, retrofitCase, takesProduct, tubeIsWrong } from './retrofit-check-case';
 import { controlFindings } from './retrofit-check-control';
 import { type RetrofitCheckInput, retrofitCheckSchema } from './retrofit-check-input';
 import { type LabelLine, labelLines } from './retrofit-check-label';
@@ -19,7 +19,7 @@ import { tubeFindings } from './retrofit-check-tube';
 export interface RetrofitCheck extends BreakerFigures {
   /** No stop, hard or soft. */
   ok: boolean;
-  /** How the lamp is fed once the work is done; null while the product does not tell. */
+  /** How the lamp is fed once the work is done; null while the product does not tell, or can not be fed so. */
   wiring:
     | 'unchanged'
     | 'on-ballast'
@@ -180,13 +180,14 @@ export function retrofitCheck(input: RetrofitCheckInput): Outcome<RetrofitCheck>
   const c = retrofitCase(input);
   const figures = breakerFigures(c);
   const findings = findingsOf(c, figures);
-  const lines = labelLines(c);
+  const wrong = tubeIsWrong(c);
+  const lines = wrong ? [] : labelLines(c);
   return {
     result: {
       ok: findings.every((finding) => finding.severity !== 'stop'),
-      wiring: wiringOf(c),
-      lampholders: lampholdersOf(c),
-      ballast: ballastOf(c),
+      wiring: wrong ? null : wiringOf(c),
+      lampholders: wrong ? null : lampholdersOf(c),
+      ballast: wrong ? null : ballastOf(c),
       label: { required: lines.length > 0, lines },
       ...figures,
     },

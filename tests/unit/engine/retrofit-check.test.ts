@@ -260,6 +260,21 @@ describe('result', () => {
     );
   });
 
+  it('says no wiring and no label for a tube that can not run there', () => {
+    for (const change of [
+      { action: 'relamp' },
+      { product: of({ tubeType: 'A' }) },
+      { action: 'external-driver' },
+    ])
+      expect(result(change)).toMatchObject({
+        ok: false,
+        wiring: null,
+        lampholders: null,
+        ballast: null,
+        label: { required: false, lines: [] },
+      });
+  });
+
   it('keeps every key, with null where there is no figure', () => {
     const bare = runCalculation(retrofitCheckCalculation, {
       basis: 'iec',
