@@ -1,6 +1,6 @@
 /**
  * The message catalogue: every text of the customer's pages, the crew's sheet, findings, working and mails by its
- * key. How a text is written: catalogue.ts. A page that must stay light takes its part of it (customer.ts).
+ * key. How a text is written: catalogue.ts. The customer's pages load their part of it alone: quotes.ts.
  */
 import type { ShopSettings } from '@/lib/units/settings';
 import { catalogueOf, type MessageValues } from './catalogue';

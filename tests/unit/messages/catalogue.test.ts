@@ -1,7 +1,7 @@
 /** The catalogue: a text for all that the engine can say, filled in the shop's units, in the trade's words. */
 import { describe, expect, it } from 'vitest';
 import { catalogueKeys, hasMessage, message, type MessageKey, messageOr, term } from '@/lib/messages';
-import { message as customerMessage } from '@/lib/messages/customer';
+import { customerMessage } from '@/lib/messages/quotes';
 import { fillTerms } from '@/lib/messages/terms';
 import { DEFAULT_SETTINGS } from '@/lib/units';
 import { engineCodes } from '../../support/engine-codes';
@@ -87,8 +87,12 @@ describe('message', () => {
     expect(fillTerms('{=nothing}', iec)).toBe('{=nothing}');
   });
 
-  it('says the same from the customer’s own part of it', () => {
-    expect(customerMessage('customer.for')).toBe(message('customer.for'));
+  it('reads the same where the customer’s page loads its own part', () => {
+    const values = { name: 'A', revision: 2 };
+    expect(customerMessage('customer.accepted-already', values)).toBe(
+      message('customer.accepted-already', values),
+    );
+    expect(customerMessage('customer.accepted-already')).toBe(message('customer.accepted-already'));
   });
 
   it('counts in English', () => {
