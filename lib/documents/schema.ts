@@ -13,7 +13,6 @@ export const DOCUMENT_EVENTS = [
   'released',
   'voided',
   'paid',
-  'downloaded',
 ] as const;
 export type DocumentEventKind = (typeof DOCUMENT_EVENTS)[number];
 

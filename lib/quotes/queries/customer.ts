@@ -21,18 +21,21 @@ const UNACCEPTED = {
   superseded: 'customer.wait.superseded',
 } as const;
 
+const PATH = ['survey', 'quote', 'deposit', 'install', 'closeout', 'paid'] as const;
+
 /** Until it is accepted, the quote is what a customer's job waits at, whatever else the shop still has to do. */
 async function standsOf(jobId: string, state: DocumentState): Promise<Stands> {
-  const { steps } = await getJob(jobId);
-  if (state === 'accepted')
+  if (state !== 'accepted') {
+    const stateAt = (index: number) => (index === 0 ? 'reached' : index === 1 ? 'open' : 'beyond');
     return {
-      steps: steps.map((step) => ({ key: step.key, state: step.state })),
-      waitsFor: `customer.wait.${steps.find((step) => step.state === 'open')?.waitsFor ?? 'nothing'}`,
+      steps: PATH.map((key, index) => ({ key, state: stateAt(index) })),
+      waitsFor: UNACCEPTED[state],
     };
-  const stateAt = (key: string) => (key === 'survey' ? 'reached' : key === 'quote' ? 'open' : 'beyond');
+  }
+  const { steps } = await getJob(jobId);
   return {
-    steps: steps.map((step) => ({ key: step.key, state: stateAt(step.key) })),
-    waitsFor: UNACCEPTED[state],
+    steps: steps.map((step) => ({ key: step.key, state: step.state })),
+    waitsFor: `customer.wait.${steps.find((step) => step.state === 'open')?.waitsFor ?? 'nothing'}`,
   };
 }
 
