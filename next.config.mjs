@@ -6,6 +6,23 @@
 const config = {
   distDir: process.env.NEXT_DIST_DIR ?? '.next',
   poweredByHeader: false,
+  // A customer's page must not give its address away, nor be found.
+  headers: async () => [
+    {
+      source: '/:where(l|new-password)/:rest*',
+      headers: [
+        { key: 'Referrer-Policy', value: 'no-referrer' },
+        { key: 'X-Robots-Tag', value: 'noindex, nofollow' },
+      ],
+    },
+    {
+      source: '/:path*',
+      headers: [
+        { key: 'X-Content-Type-Options', value: 'nosniff' },
+        { key: 'X-Frame-Options', value: 'DENY' },
+      ],
+    },
+  ],
   reactStrictMode: true,
   serverExternalPackages: [
     'sequelize',

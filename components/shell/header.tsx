@@ -22,7 +22,9 @@ export function ShopHeader({
           <p className="font-plate text-2xl leading-none font-bold tracking-wider uppercase">Lampwright</p>
           <p className="text-sm text-ink-2">{shopName}</p>
         </div>
-        <PlateNav items={items} />
+        <div className="order-last min-w-0 basis-full lg:order-none lg:basis-auto">
+          <PlateNav items={items} />
+        </div>
         <details className="relative">
           <summary className="flex min-h-touch list-none flex-col justify-center text-right leading-tight">
             <span>{personName}</span>

@@ -112,7 +112,7 @@ function ParsedField({
   );
 }
 
-const plain = (value: number) => formatNumber(value).replaceAll(',', '').replace('−', '-');
+const plain = (value: number) => plainNumber(value);
 
 export function NumberField({ min, max, ...rest }: NumberLike & { min?: number; max?: number }) {
   const parse: Parser = (text) => {
@@ -136,7 +136,14 @@ export function LengthField({
     return parsed;
   };
   const show = (value: number) => formatLength(value, settings).replace(/ m$/, '');
-  return <ParsedField {...rest} unit={lengthUnit(settings)} parse={parse} show={show} />;
+  return (
+    <ParsedField
+      {...rest}
+      unit={settings.units === 'us' ? undefined : lengthUnit(settings)}
+      parse={parse}
+      show={show}
+    />
+  );
 }
 
 export function TemperatureField({ settings, ...rest }: NumberLike & { settings: ShopSettings }) {

@@ -2,6 +2,7 @@
 import { Customer, Job, JobClosing, Site } from '@/models';
 import { type AnyActor, command } from '@/lib/access/command';
 import type { Actor } from '@/lib/access/policy';
+import { expireLinksOfJob } from '@/lib/links/commands';
 import { nextNumber } from '@/lib/platform/db/counter';
 import { AppError, invalid, notFound } from '@/lib/platform/http/errors';
 import { factsOfJobs } from './facts';
@@ -86,6 +87,7 @@ export async function closeJob(actor: Actor, input: CloseJobInput): Promise<{ id
       membershipId: actor.membershipId,
       note: input.note,
     });
+    await expireLinksOfJob(input.jobId);
     await audit('job.closed', { type: 'job', id: input.jobId });
     await refreshStage(input.jobId);
     return { id: input.jobId };
