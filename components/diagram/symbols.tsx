@@ -61,7 +61,12 @@ export function Resistor({ x, y, basis }: { x: number; y: number; basis: Basis }
   const zig = [-18, -15, -9, -3, 3, 9, 15, 18].map(
     (dx, i) => `${x + dx},${y + (i === 0 || i === 7 ? 0 : i % 2 ? -6 : 6)}`,
   );
-  return <polyline points={zig.join(' ')} {...STROKE} fill="var(--sheet)" />;
+  return (
+    <>
+      <rect x={x - 18} y={y - 3} width={36} height={6} fill="var(--sheet)" />
+      <polyline points={zig.join(' ')} {...STROKE} />
+    </>
+  );
 }
 
 /** A light-emitting diode pointing right (IEC 60617 05-03-02, IEEE 315 8.5.3): triangle, bar and two arrows. */

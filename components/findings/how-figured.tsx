@@ -40,9 +40,7 @@ export function HowFigured({
   if (steps.length === 0) return null;
   return (
     <details>
-      <summary className="flex min-h-touch items-center underline decoration-dotted underline-offset-4">
-        {label}
-      </summary>
+      <summary className="min-h-touch py-2.5 underline decoration-dotted underline-offset-4">{label}</summary>
       <div className="mt-1">
         {steps.map((step, index) => (
           <Step key={`${step.key}-${index}`} step={step} settings={settings} />

@@ -115,7 +115,7 @@ function Entry({ one, survey }: { one: Kept<ChangeLine>; survey: Survey }) {
         />
       </div>
       <details>
-        <summary className="flex min-h-touch items-center">What the change settles</summary>
+        <summary className="min-h-touch py-2.5">What the change settles</summary>
         <div className="grid gap-3 sm:grid-cols-3">
           <ChoiceField
             label="New lampholders"

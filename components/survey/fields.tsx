@@ -4,7 +4,7 @@ import { useId, useState } from 'react';
 import { FigureInput, SelectInput, TextArea, TextInput } from '@/components/ui/field';
 import {
   formatLength,
-  formatNumber,
+  plainNumber,
   lengthUnit,
   parseLength,
   parseNumber,

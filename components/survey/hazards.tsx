@@ -23,7 +23,7 @@ export function Hazards({ area, set }: { area: Area; set: (change: Partial<Area>
   const yes = HAZARDS.filter((key) => area.hazards[key] === 'yes').length;
   return (
     <details>
-      <summary className="flex min-h-touch items-center gap-2 text-lg font-bold">
+      <summary className="min-h-touch py-2.5 text-lg font-bold">
         Hazards {yes > 0 ? <span className="text-danger">({yes} found)</span> : null}
       </summary>
       <div className="mt-2 grid gap-3 sm:grid-cols-2">

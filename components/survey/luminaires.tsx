@@ -76,7 +76,7 @@ function Wiring({ value, set }: { value: Luminaire; set: (change: Partial<Lumina
     set({ electrical: { ...value.electrical, ...change } });
   return (
     <details>
-      <summary className="flex min-h-touch items-center">How it is wired</summary>
+      <summary className="min-h-touch py-2.5">How it is wired</summary>
       <div className="grid gap-3 sm:grid-cols-2">
         <NumberField
           label="Supply"
