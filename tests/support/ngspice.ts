@@ -12,34 +12,45 @@ export const N_SCALE = K_OVER_Q / NGSPICE_K_OVER_Q;
 const CONTROL = ['.control', 'set numdgt=16', 'set width=400', 'op', 'print all', 'quit', '.endc', '.end'];
 
 /**
- * How near two steps must come. Currents through milliohms carry 1e-16 of the volts over them as noise: where the
- * first pair can't be met ngspice would step for hours, so the second is tried; its last step is still far nearer.
+ * How near two steps must come. Currents through milliohms carry the last bits of the volts over them as noise: where
+ * that is more than a tolerance, ngspice would step on for hours, so each is given up after a while for the next. The
+ * step after the one that passes is far nearer, Newton's being what it is.
  */
-const TOLERANCES = ['vntol=1e-12 abstol=1e-14', 'vntol=1e-10 abstol=1e-11'] as const;
-const PATIENCE_MILLISECONDS = 4000;
+const TOLERANCES = [
+  'vntol=1e-10 abstol=1e-12',
+  'vntol=1e-10 abstol=1e-10',
+  'vntol=1e-8 abstol=1e-9',
+] as const;
+const PATIENCE_MILLISECONDS = 3000;
+
+function attempt(file: string, lines: readonly string[], tolerance: string): Map<string, number> {
+  // Full pivoting: with ngspice's own threshold conductors of no resistance cost six digits in loops of milliohms.
+  const options = `.options reltol=1e-9 gmin=1e-18 pivrel=0.9 itl1=200 itl2=200 ${tolerance}`;
+  writeFileSync(file, ['* operating point', options, ...lines, ...CONTROL].join('\n'));
+  try {
+    const output = execFileSync('ngspice', ['-b', file], {
+      encoding: 'utf8',
+      maxBuffer: 1 << 28,
+      stdio: 'pipe',
+      timeout: PATIENCE_MILLISECONDS,
+      killSignal: 'SIGKILL',
+    });
+    return readValues(output);
+  } catch (error) {
+    if ((error as NodeJS.ErrnoException).code === 'ETIMEDOUT') return new Map();
+    throw error;
+  }
+}
 
 /** Solves the operating point; `lines` without title, tolerances and control. Returns node volts and branch amps. */
 export function operatingPoint(lines: readonly string[]): Map<string, number> {
   const folder = mkdtempSync(join(tmpdir(), 'netlist-'));
-  const file = join(folder, 'circuit.cir');
-  const run = (tolerance: string) => {
-    const options = `.options reltol=1e-9 gmin=1e-18 itl1=500 itl2=500 ${tolerance}`;
-    writeFileSync(file, ['* operating point', options, ...lines, ...CONTROL].join('\n'));
-    return readValues(
-      execFileSync('ngspice', ['-b', file], {
-        encoding: 'utf8',
-        maxBuffer: 1 << 28,
-        stdio: 'pipe',
-        timeout: PATIENCE_MILLISECONDS,
-        killSignal: 'SIGKILL',
-      }),
-    );
-  };
   try {
-    return run(TOLERANCES[0]);
-  } catch (error) {
-    if ((error as NodeJS.ErrnoException).code !== 'ETIMEDOUT') throw error;
-    return run(TOLERANCES[1]);
+    for (const tolerance of TOLERANCES) {
+      const values = attempt(join(folder, 'circuit.cir'), lines, tolerance);
+      if (values.size > 0 && ![...values.values()].some(Number.isNaN)) return values;
+    }
+    throw new Error('ngspice finds no operating point for this circuit');
   } finally {
     rmSync(folder, { recursive: true });
   }
