@@ -1,6 +1,6 @@
 /**
  * Preferred values of resistors, IEC 60063:2015, one decade. Listed, not computed: E6, E12 and E24 do not
- * follow 10^(i/n) everywhere (27, 30, 33, 36, 39, 43, 47 and 82 differ). Read in a transcription.
+ * follow 10^(i/n) everywhere (27, 30, 33, 36, 39, 43, 47 and 82 differ). Read in a third-party copy.
  */
 export const E_SERIES_BASIS = 'IEC 60063:2015, preferred number series for resistors';
 
