@@ -159,8 +159,7 @@ export async function applySurveyEvents(
     const answer = await applyOne(actor, jobId, event).catch(async (error: unknown) => {
       const mapped = toAppError(error);
       // The same event may have come twice at once; the other one's answer is then this one's too.
-      const twin =
-        mapped.code === 'conflict' && !mapped.current ? await findReplay(actor, jobId, event) : null;
+      const twin = mapped.code === 'conflict' ? await findReplay(actor, jobId, event) : null;
       if (twin) return twin;
       if (mapped.code === 'unavailable' || mapped.code === 'unexpected') throw error;
       return refusal(event, mapped);

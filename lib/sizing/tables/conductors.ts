@@ -1,5 +1,5 @@
 /**
- * Conductor resistances. Read in transcriptions: the licensed standards prevail.
+ * Conductor resistances. Read in extracts: the licensed standards prevail.
  *
  * US: NFPA 70 (NEC) 2023, Chapter 9, Table 8, direct-current resistance at 75 C, uncoated copper, the ohm/km
  * column. AWG 18 to 8 are listed solid and stranded, AWG 6 and larger stranded only.
@@ -61,7 +61,7 @@ export const US_SIZES = [...Object.keys(SMALL_AWG), ...Object.keys(NEC_TABLE_8)]
 export const METRIC_SIZES = Object.keys(IEC_60228);
 export const ALL_SIZES: readonly string[] = [...US_SIZES, ...METRIC_SIZES];
 
-export const TABLE_8_BASIS = 'NEC 2023 Chapter 9 Table 8 (read in a transcription)';
+export const TABLE_8_BASIS = 'NEC 2023 Chapter 9 Table 8 (read in an extract)';
 export const B258_BASIS =
   'ASTM B258 diameter at 0.017241 ohm mm2/m, 20 C (IEC 60028 standard annealed copper)';
-export const IEC_60228_BASIS = 'IEC 60228:2004 Tables 1 to 3 (read in transcriptions)';
+export const IEC_60228_BASIS = 'IEC 60228:2004 Tables 1 to 3 (read in extracts)';
