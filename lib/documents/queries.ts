@@ -54,17 +54,26 @@ export async function eventsOf(documentIds: string[]): Promise<Map<string, Event
   return byDocument;
 }
 
+async function pdfMadeLater(documentId: string): Promise<string | null> {
+  const rows = await select<{ sha256: string }>(
+    `select detail ->> 'sha256' as sha256 from document_events where document_id = $1 and kind = 'pdf' order by at limit 1`,
+    [documentId],
+  );
+  return rows[0]?.sha256 ?? null;
+}
+
 /** What a request for a PDF needs to know before it is served. @throws {AppError} `not-found` */
 export async function pdfOf(
   id: string,
 ): Promise<{ kind: DocumentKind; jobId: string; sha256: string; fileName: string }> {
   const document = await getDocument(id);
-  if (!document.pdfSha256) throw notFound('The PDF of this document');
+  const sha256 = document.pdfSha256 ?? (await pdfMadeLater(id));
+  if (!sha256) throw notFound('The PDF of this document');
   const revision = document.revision > 1 ? `-${document.revision}` : '';
   return {
     kind: document.kind,
     jobId: document.jobId,
-    sha256: document.pdfSha256,
+    sha256,
     fileName: `${document.kind}-${document.number}${revision}.pdf`.replace(/[^a-z0-9.-]+/gi, '-'),
   };
 }

@@ -13,6 +13,8 @@ export const DOCUMENT_EVENTS = [
   'released',
   'voided',
   'paid',
+  // The PDF of a document whose number is only known in the transaction that freezes it.
+  'pdf',
 ] as const;
 export type DocumentEventKind = (typeof DOCUMENT_EVENTS)[number];
 

@@ -10,6 +10,7 @@ import { circuitFindings } from './en/findings-circuits';
 import { retrofitFindings } from './en/findings-retrofit';
 import { jobs } from './en/jobs';
 import { labels } from './en/labels';
+import { money } from './en/money';
 import { people } from './en/people';
 import { quotes } from './en/quotes';
 import { words } from './en/words';
@@ -25,6 +26,7 @@ const catalogue = catalogueOf({
   ...crew,
   ...jobs,
   ...people,
+  ...money,
   ...circuitFindings,
   ...retrofitFindings,
   ...labels,

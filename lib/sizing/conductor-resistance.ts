@@ -55,7 +55,8 @@ export function awgDiameterMillimetres(awg: number): number {
   return 0.127 * 92 ** ((36 - awg) / 39);
 }
 
-function flexibleNote(size: string): Finding {
+/** Said wherever a flexible conductor of an AWG size is figured. */
+export function flexibleNote(size: string): Finding {
   return note(
     'flexible-as-stranded',
     `${size}: the US tables list no flexible conductor; the stranded row is used.`,

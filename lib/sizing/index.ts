@@ -3,6 +3,7 @@ import type { Calculation } from '@/lib/engine/contract';
 import { arrayAnalysisCalculation } from './array-analysis';
 import { arraySpreadCalculation } from './array-spread';
 import { conductorResistanceCalculation } from './conductor-resistance';
+import { conductorSizeCalculation } from './conductor-size';
 import { resistorArrayCalculation } from './resistor-array';
 import { retrofitCheckCalculation } from './retrofit-check';
 import { tapeAnalysisCalculation } from './tape-analysis';
@@ -11,6 +12,7 @@ import { voltageDropCalculation } from './voltage-drop';
 export const sizingCalculations = [
   conductorResistanceCalculation,
   voltageDropCalculation,
+  conductorSizeCalculation,
   resistorArrayCalculation,
   arrayAnalysisCalculation,
   arraySpreadCalculation,

@@ -1,5 +1,6 @@
 import { afterAll, afterEach, beforeAll, describe, expect, it } from 'vitest';
-import { type Accepted, acceptedHooks } from '@/lib/quotes/accepted';
+import { acceptedHooks } from '@/lib/quotes/accepted';
+import type { Accepted } from '@/lib/quotes/schema/accepted';
 import {
   acceptQuote,
   declineQuote,

@@ -18,4 +18,44 @@ export const findings = {
   'finding.class-two-exceeded.title': 'More than Class 2 gives',
   'finding.class-two-exceeded.body':
     '{amps:A} is asked of a Class 2 source that may give {limitAmps:A} at {volts:V}. Split the run over more outputs, or wire it as Class 1 or power wiring.',
+  'finding.load-over-conductors.title': 'More than one cable carries',
+  'finding.load-over-conductors.body':
+    '{size}, the largest here, carries {ampacity:A} in these surroundings: too little for {amps:A} behind {overcurrentAmps:A}. Split the load over more circuits.',
+  'finding.ambient-too-hot.title': 'Too hot for this insulation',
+  'finding.ambient-too-hot.body':
+    'At {ambientCelsius:C} around the cable its insulation has nothing left to carry a current. Choose a hotter insulation, or another way for the cable.',
+  'finding.no-standard-rating.title': 'No {=breaker} is large enough',
+  'finding.no-standard-rating.body':
+    'No standard rating is large enough for {amps:A}. Split the load over more circuits.',
+  'finding.drop-over-limit.title': 'Too much drop',
+  'finding.drop-over-limit.body':
+    '{size} loses {dropPct:%} ({dropVolts:V}) over this run; the limit is {limitPct:%}. Use a shorter run or higher volts, or split the load.',
+  'finding.disconnection-time.title': 'Does not trip in time',
+  'finding.disconnection-time.body':
+    'With {size} the fault loop has {zsOhms:ohm}; this {=breaker} trips at once up to {zsMaxOhms:ohm}. Use a smaller rating or a quicker curve, a shorter run, or protect by residual current.',
+  'finding.class-two-source.title': 'For a Class 2 source only',
+  'finding.class-two-source.body':
+    'Sized for {amps:A} of the {limitAmps:A} that a Class 2 source may give at {volts:V}. Only a source marked Class 2 counts; behind any other, AWG 14 at least and an overcurrent device.',
+  'finding.over-class-two.title': 'More than Class 2',
+  'finding.over-class-two.body':
+    '{amps:A} at {volts:V} is more than the {limitAmps:A} of a Class 2 source. Split it over outputs, or use a listed low-voltage lighting system (to {articleAmps:A}) or power wiring.',
+  'finding.grouped-not-counted.title': 'Grouped circuits not counted',
+  'finding.grouped-not-counted.body':
+    'Only {loadedConductors} current-carrying conductors are counted, beside {groupedCircuits} circuits together. Give all that share the raceway.',
+  'finding.insulation-below-terminals.title': 'Insulation cooler than the terminals',
+  'finding.insulation-below-terminals.body':
+    'The terminals take {terminalCelsius:C}, the insulation only {insulationCelsius:C}. Choose a conductor that stands what the terminals may reach.',
+  'finding.rounded-up-overcurrent.title': 'Next rating up',
+  'finding.rounded-up-overcurrent.body':
+    '{overcurrentAmps:A} is the next standard rating above the {ampacity:A} that the conductor carries. Allowed for lighting; not where several receptacles hang on it.',
+  'finding.terminals-below-insulation.title': 'Terminals cooler than the cable',
+  'finding.terminals-below-insulation.body':
+    'The conductor may reach {insulationCelsius:C}, the terminals are taken for {terminalCelsius:C}. See what {=breaker} and terminals take, or size it as 70 °C cable.',
+  'finding.fault-loop-not-checked.title': 'Fault loop not checked',
+  'finding.fault-loop-not-checked.body':
+    'Whether the {=breaker} trips in time at the end of {metres:m} is not checked. Give the loop impedance at its origin and the curve.',
+  'finding.solid-as-stranded.title': 'Solid taken as stranded',
+  'finding.solid-as-stranded.body': '{size} is not made solid; the stranded row is used.',
+  'finding.inputs-not-used.title': 'Not used here',
+  'finding.inputs-not-used.body': 'These figures do not count in this answer: {keys}.',
 } as const;

@@ -19,3 +19,7 @@ export const shopIdsByPerson = (personId: string) => ids('shop_ids_by_person($1)
 export const shopIdsWithOutbox = (most: number) => ids('shop_ids_with_outbox($1)', [most]);
 export const shopIdByLink = (tokenSha256: string) => id('shop_id_by_link($1)', [tokenSha256]);
 export const linkIdByToken = (tokenSha256: string) => id('link_id_by_token($1)', [tokenSha256]);
+export const shopIdByCheckout = (account: string, checkoutId: string) =>
+  id('shop_id_by_checkout($1, $2)', [account, checkoutId]);
+export const shopIdByPaymentSession = (sessionId: string) =>
+  id('shop_id_by_payment_session($1)', [sessionId]);
