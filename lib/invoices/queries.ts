@@ -5,7 +5,7 @@ import { select, withShop } from '@/lib/platform/db';
 import { notFound } from '@/lib/platform/http/errors';
 import { getShop, settingsOf } from '@/lib/shops/queries';
 import { dayIn } from '@/lib/units';
-import type { InvoiceContent, InvoiceRow } from './schema';
+import { balanceOf, type InvoiceContent, type InvoiceRow } from './schema';
 
 const INVOICES = `
   select d.id, d.job_id as "jobId", d.number, d.title, d.canonical::jsonb ->> 'purpose' as purpose,
@@ -59,5 +59,48 @@ export async function moneyOfJob(shopId: string, jobId: string) {
     const invoices = await invoicesOfJob(jobId);
     const payments = await paymentsOfJob(jobId);
     return { job, settings, invoices, payments, today: dayIn(settings.timeZone, new Date()) };
+  });
+}
+
+/** An invoice for the customer of its job; null for one of another job. */
+export async function customerInvoice(shopId: string, jobId: string, id: string) {
+  return withShop(shopId, async () => {
+    const invoice = (await invoicesOfJob(jobId)).find((one) => one.id === id);
+    if (!invoice) return null;
+    const balance = balanceOf(invoice);
+    const shop = await getShop(shopId);
+    return {
+      invoice,
+      content: await invoiceContent(id),
+      balanceMinor: String(balance),
+      overCeiling: balance > BigInt(shop.cardCeilingMinor),
+    };
+  });
+}
+
+/** What the customer owes and paid, for "where your job stands". */
+export async function customerInvoices(shopId: string, jobId: string) {
+  return withShop(shopId, async () =>
+    (await invoicesOfJob(jobId))
+      .filter((invoice) => !invoice.voided)
+      .map((invoice) => ({
+        id: invoice.id,
+        number: invoice.number,
+        purpose: invoice.purpose,
+        amountMinor: invoice.amountMinor,
+        paid: balanceOf(invoice) <= 0n,
+      })),
+  );
+}
+
+/** For the page that one comes back to from the card service: no amount, no name of the customer. */
+export async function returnView(shopId: string, invoiceId: string) {
+  return withShop(shopId, async () => {
+    const invoice = await getInvoice(invoiceId);
+    const links = await select<{ id: string }>(
+      'select id from customer_links where job_id = $1 and revoked_at is null order by created_at limit 1',
+      [invoice.jobId],
+    );
+    return { number: invoice.number, shopName: (await getShop(shopId)).name, linkId: links[0]?.id ?? null };
   });
 }

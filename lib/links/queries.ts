@@ -61,3 +61,8 @@ export interface CustomerVisit {
   address: string;
   userAgent: string;
 }
+
+/** The address that a link was made for. */
+export async function findContact(shopId: string, linkId: string): Promise<string> {
+  return (await withShop(shopId, () => findLink(linkId)))?.contactEmail ?? '';
+}

@@ -29,9 +29,12 @@ interface SessionRow {
   amountMinor: string;
   currency: string;
   state: PayState;
+  /** Young enough for its card page to be open for a good while yet. */
+  fresh: boolean;
 }
 
-const SESSION = `id, invoice_id as "invoiceId", account, checkout_id as "checkoutId", amount_minor::text as "amountMinor", currency, state`;
+const SESSION = `id, invoice_id as "invoiceId", account, checkout_id as "checkoutId", amount_minor::text as "amountMinor", currency, state,
+  created_at > now() - interval '20 minutes' as fresh`;
 
 const base = () => env().APP_URL.replace(/\/$/, '');
 
@@ -71,7 +74,8 @@ async function prepare(shopId: string, jobId: string, invoiceId: string, email: 
     );
     if (pending.length > 0)
       throw new AppError('conflict', 'A payment for this invoice is on its way already.');
-    const fresh = open.find((one) => one.amountMinor === String(balance) && one.checkoutId === null);
+    // A second press, or a second tab, goes to the same page; an old page is replaced before it runs out.
+    const fresh = open.find((one) => one.amountMinor === String(balance) && one.fresh);
     const session =
       fresh ?? (await insertSession(shopId, invoiceId, shop.stripeAccount ?? '', balance, invoice.currency));
     await audit('payment.started', { type: 'document', id: invoiceId }, { after: { sessionId: session.id } });
@@ -109,6 +113,7 @@ export async function startCheckout(
 ): Promise<{ url: string }> {
   const { session, stale, description } = await prepare(shopId, jobId, invoiceId, email);
   for (const old of stale) if (old.checkoutId) await closeStale(shopId, old);
+  if (session.checkoutId) return reopen(shopId, session, session.checkoutId);
   const back = `${base()}/pay/${session.id}`;
   const checkout = await paymentService().createCheckoutSession({
     account: session.account || null,
@@ -131,6 +136,14 @@ export async function startCheckout(
   );
   if (!checkout.url) throw new AppError('unavailable', 'The card page could not be opened. Try again.');
   return { url: checkout.url };
+}
+
+/** The card page that was opened a moment ago, if it still is. */
+async function reopen(shopId: string, session: SessionRow, checkoutId: string): Promise<{ url: string }> {
+  const checkout = await paymentService().fetchCheckoutSession(checkoutId, session.account || null);
+  if (checkout.state === 'open' && checkout.url) return { url: checkout.url };
+  await settle(shopId, session.id, checkout);
+  throw new AppError('conflict', 'This payment page has been used. Reload to see where the invoice stands.');
 }
 
 /** An older page must not be paid too: it is expired, and settled if it had been paid in that moment. */

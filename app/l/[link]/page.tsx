@@ -4,6 +4,8 @@ import { cache } from 'react';
 import { OpenedBeacon } from '@/components/customer/beacon';
 import { CustomerQuote } from '@/components/customer/quote-page';
 import { Band } from '@/components/customer/section';
+import { CustomerInvoices } from '@/components/pay/customer-invoices';
+import { customerInvoices } from '@/lib/invoices/queries';
 import { visitorOfRequest } from '@/lib/links/request';
 import { message } from '@/lib/messages';
 import { toAppError } from '@/lib/platform/http/errors';
@@ -20,7 +22,9 @@ const viewOf = cache(async (link: string) => {
     throw error;
   });
   if (!visitor) notFound();
-  return customerView(visitor.shopId, visitor.link.jobId);
+  const view = await customerView(visitor.shopId, visitor.link.jobId);
+  const accepted = view?.acceptance ? await customerInvoices(visitor.shopId, visitor.link.jobId) : [];
+  return view ? { ...view, invoices: accepted } : null;
 });
 
 export async function generateMetadata({ params }: Props): Promise<Metadata> {
@@ -37,6 +41,7 @@ export default async function CustomerPage({ params }: Props) {
       {view ? (
         <>
           <OpenedBeacon link={link} documentId={view.documentId} />
+          <CustomerInvoices base={`/l/${link}`} invoices={view.invoices} settings={view.content.settings} />
           <CustomerQuote
             view={view}
             base={`/l/${link}`}
