@@ -27,7 +27,7 @@ export function SignInForm() {
   });
   return (
     <form onSubmit={submit} noValidate className="flex flex-col gap-4">
-      <FormFailure failure={failure} />
+      <FormFailure failure={failure} word="Not signed in" />
       <TextInput
         id="email"
         label="E-mail"

@@ -90,7 +90,15 @@ export function useZodForm<I extends FieldValues, T>(options: {
 }
 
 /** What went wrong with the whole form; takes the focus so that it is read out. */
-export function FormFailure({ failure, children }: { failure: FailedResult | null; children?: ReactNode }) {
+export function FormFailure({
+  failure,
+  word = 'Not saved',
+  children,
+}: {
+  failure: FailedResult | null;
+  word?: string | undefined;
+  children?: ReactNode;
+}) {
   const ref = useRef<HTMLDivElement>(null);
   useEffect(() => {
     if (failure && failure.issues.length === 0) ref.current?.focus();
@@ -98,7 +106,7 @@ export function FormFailure({ failure, children }: { failure: FailedResult | nul
   if (!failure) return null;
   return (
     <div ref={ref} tabIndex={-1}>
-      <Notice kind="danger" word="Not saved" title={failure.message} role="alert">
+      <Notice kind="danger" word={word} title={failure.message} role="alert">
         {children}
       </Notice>
     </div>

@@ -6,7 +6,7 @@
 import { describe, expect, it } from 'vitest';
 import { runCalculation } from '@/lib/engine/run';
 import { type RetrofitCheck, retrofitCheckCalculation } from '@/lib/sizing/retrofit-check';
-import { INSTANT_TRIP } from '@/lib/sizing/retrofit-check-breaker';
+import { INSTANT_TRIP } from '@/lib/sizing/tables/breakers';
 import entries from './data/retrofit.json';
 
 type Entry = { id: string; inputs: Record<string, unknown>; expected: Record<string, unknown> };
