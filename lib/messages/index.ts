@@ -14,6 +14,7 @@ import { money } from './en/money';
 import { people } from './en/people';
 import { quotes } from './en/quotes';
 import { words } from './en/words';
+import { wiring } from './en/wiring';
 import { working } from './en/working';
 
 export type { MessageValues } from './catalogue';
@@ -31,6 +32,7 @@ const catalogue = catalogueOf({
   ...retrofitFindings,
   ...labels,
   ...words,
+  ...wiring,
 });
 
 export type MessageKey = (typeof catalogue.keys)[number];

@@ -7,8 +7,8 @@ export const wiring = {
   'wiring.step.feeder': 'Feed at the {place:wiring.place}: {size}, colours as below.',
   'wiring.step.joints': 'Each joint pulled by hand, relieved of strain, covered.',
   'wiring.step.joint-photo': 'Photo of the joints, lids off.',
-  'wiring.step.breaker': 'Its own {=breaker}: {amps} {curve}',
-  'wiring.step.home-run': '{=home run} {size}, {length} to the first, colours as below.',
+  'wiring.step.breaker': 'Its own {=breaker}: {rating}.',
+  'wiring.step.home-run': '{=Home-run} {size}, {length} to the first, colours as below.',
   'wiring.step.luminaires': '{units} × {name} in a row, {spacing} apart.',
   'wiring.step.ground': '{=Ground} joined at every {=fixture}, tested end to end.',
   'wiring.step.mains-joints': 'Joints pulled by hand, lids on, nothing bare.',
@@ -53,14 +53,16 @@ export const wiring = {
   'wiring.reading.string-amps-of': 'Amps in string {index}, lit',
   'wiring.how.V': 'Clip on dead, energise, read, de-energise.',
   'wiring.how.A': 'Clamp on dead, energise, read, de-energise.',
-  'wiring.how.string': 'Meter in series while dead, energise, read, de-energise. Never open a running string.',
+  'wiring.how.string':
+    'Meter in series while dead, energise, read, de-energise. Never open a running string.',
   'wiring.verdict.in': 'in band',
   'wiring.verdict.near': 'near the band',
   'wiring.verdict.out': 'out of band',
   'wiring.hint.volts-start.low':
     'Look first at the driver’s switch and at the joint where the feeder meets the tape.',
   'wiring.hint.volts-start.high': 'Look first at the driver’s switch, and at whether the tape is lit at all.',
-  'wiring.hint.volts-middle.low': 'Look first at the feeds: one that carries nothing shows here before elsewhere.',
+  'wiring.hint.volts-middle.low':
+    'Look first at the feeds: one that carries nothing shows here before elsewhere.',
   'wiring.hint.volts-middle.high': 'Look first at whether all segments beyond are lit.',
   'wiring.hint.volts-end.low':
     'Look first at the far-end joint, then at the feeder: longer or thinner than drawn pulls the end down.',

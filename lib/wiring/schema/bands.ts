@@ -20,7 +20,8 @@ export interface Band {
   high: number;
 }
 
-export type ReadingKind = 'volts-start' | 'volts-middle' | 'volts-end' | 'driver-amps' | 'breaker-amps' | 'string-amps';
+export type ReadingKind =
+  'volts-start' | 'volts-middle' | 'volts-end' | 'driver-amps' | 'breaker-amps' | 'string-amps';
 
 export interface Expected extends Band {
   kind: ReadingKind;
@@ -97,7 +98,11 @@ function tapeBands(run: TapeRun, settings: ShopSettings): Expected[] {
     index: 1,
     unit,
     mains: false,
-    ...bandOver(nominal[of], corners.map((corner) => corner[of]), unit),
+    ...bandOver(
+      nominal[of],
+      corners.map((corner) => corner[of]),
+      unit,
+    ),
   });
   return [
     expected('volts-start', 'start', 'V'),

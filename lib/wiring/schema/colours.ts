@@ -7,7 +7,15 @@
 import * as z from 'zod/mini';
 import type { ShopSettings } from '@/lib/units/settings';
 
-export const CONDUCTOR_ROLES = ['line', 'line-2', 'line-3', 'neutral', 'ground', 'positive', 'negative'] as const;
+export const CONDUCTOR_ROLES = [
+  'line',
+  'line-2',
+  'line-3',
+  'neutral',
+  'ground',
+  'positive',
+  'negative',
+] as const;
 export const CONDUCTOR_COLOURS = [
   'black',
   'red',

@@ -21,11 +21,16 @@ export const EVENT_BODIES = {
   /** `value` null: not measured, with the reason in the note. */
   reading: z.strictObject({
     target,
-    value: z.nullable(z.number().check(z.minimum(-MOST, 'is out of reach'), z.maximum(MOST, 'is out of reach'))),
+    value: z.nullable(
+      z.number().check(z.minimum(-MOST, 'is out of reach'), z.maximum(MOST, 'is out of reach')),
+    ),
     note: z.string().check(z.maxLength(500, 'At most 500 characters.')),
   }),
   note: z.strictObject({ target: z.string().check(z.maxLength(120)), text: words('Write the note.') }),
-  different: z.strictObject({ target: z.string().check(z.maxLength(120)), text: words('Say what is different.') }),
+  different: z.strictObject({
+    target: z.string().check(z.maxLength(120)),
+    text: words('Say what is different.'),
+  }),
   'sign-off': z.strictObject({ name: personName }),
 } as const;
 export type SheetEventKind = keyof typeof EVENT_BODIES;
@@ -86,7 +91,8 @@ function take(progress: Progress, event: Happening): void {
   const name = text(body['name']) || by;
   switch (event.kind) {
     case 'acknowledge':
-      if (!progress.acknowledged.has(event.membershipId)) progress.acknowledged.set(event.membershipId, { name, at });
+      if (!progress.acknowledged.has(event.membershipId))
+        progress.acknowledged.set(event.membershipId, { name, at });
       break;
     case 'dead-proved':
       progress.deadProved = { name, at, note: text(body['note']) };

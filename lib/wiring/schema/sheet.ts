@@ -17,7 +17,12 @@ export const step = z.strictObject({
   conductors: z.array(conductor),
   conductorSource: text,
   /** Lines to be written or shown as they are, such as the label that stays in the fixture. */
-  lines: z.array(z.strictObject({ key: text, values: z.record(z.string(), z.nullable(z.union([z.string(), z.number()]))) })),
+  lines: z.array(
+    z.strictObject({
+      key: text,
+      values: z.record(z.string(), z.nullable(z.union([z.string(), z.number()]))),
+    }),
+  ),
 });
 export type Step = z.infer<typeof step>;
 
@@ -91,8 +96,18 @@ const circuitParts = {
 
 export const sheetCircuit = z.discriminatedUnion('kind', [
   z.strictObject({ ...circuitParts, kind: z.literal('tape-run'), electrical: tapeRun, result: tapeResult }),
-  z.strictObject({ ...circuitParts, kind: z.literal('branch-circuit'), electrical: branchCircuit, result: branchResult }),
-  z.strictObject({ ...circuitParts, kind: z.literal('resistor-array'), electrical: resistorArray, result: arrayResult }),
+  z.strictObject({
+    ...circuitParts,
+    kind: z.literal('branch-circuit'),
+    electrical: branchCircuit,
+    result: branchResult,
+  }),
+  z.strictObject({
+    ...circuitParts,
+    kind: z.literal('resistor-array'),
+    electrical: resistorArray,
+    result: arrayResult,
+  }),
 ]);
 export type SheetCircuit = z.infer<typeof sheetCircuit>;
 
@@ -132,9 +147,7 @@ export const wiringSheet = z.strictObject({
     locale: z.enum(['en-US', 'en-GB']),
     timeZone: text,
   }),
-  areas: z.array(
-    z.strictObject({ name: text, environment: text, hazards: z.array(text), notes: text }),
-  ),
+  areas: z.array(z.strictObject({ name: text, environment: text, hazards: z.array(text), notes: text })),
   /** Keys of the catalogue, in the order in which they are read. */
   cautions: z.array(text),
   circuits: z.array(sheetCircuit),

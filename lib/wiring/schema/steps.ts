@@ -13,7 +13,13 @@ interface Wires {
 
 const dc = (): Wires => ({ conductors: dcConductors(), source: COLOUR_SOURCE.dc });
 
-function stepOf(owner: string, name: string, values: Values = {}, wires?: Wires, lines: Step['lines'] = []): Step {
+function stepOf(
+  owner: string,
+  name: string,
+  values: Values = {},
+  wires?: Wires,
+  lines: Step['lines'] = [],
+): Step {
   // The same step for several strings or circuits is told apart by its index.
   const index = typeof values['index'] === 'number' ? `.${values['index']}` : '';
   const place = typeof values['place'] === 'string' ? `.${values['place']}` : '';
@@ -38,7 +44,10 @@ function tapeSteps(id: string, run: TapeRun, settings: ShopSettings): Step[] {
   const size = formatWireSize(run.feederSize);
   const places = PLACES[run.feed];
   return [
-    stepOf(id, 'driver-place', { length: formatLength(run.driverMetres, settings), volts: figure(run.driver?.volts ?? 0, 'V', settings) }),
+    stepOf(id, 'driver-place', {
+      length: formatLength(run.driverMetres, settings),
+      volts: figure(run.driver?.volts ?? 0, 'V', settings),
+    }),
     stepOf(id, 'set-switch', { volts: figure(run.driver?.volts ?? 0, 'V', settings) }),
     stepOf(id, 'tape-length', { length: formatLength(run.runMetres, settings) }),
     ...places.map((place) => stepOf(id, 'feeder', { place, size }, dc())),
@@ -49,7 +58,12 @@ function tapeSteps(id: string, run: TapeRun, settings: ShopSettings): Step[] {
 
 type BranchResult = Extract<SheetCircuit, { kind: 'branch-circuit' }>['result'];
 
-function branchSteps(id: string, circuit: BranchCircuit, result: BranchResult, settings: ShopSettings): Step[] {
+function branchSteps(
+  id: string,
+  circuit: BranchCircuit,
+  result: BranchResult,
+  settings: ShopSettings,
+): Step[] {
   const wires = { conductors: mainsConductors(circuit, settings), source: mainsColourSource(settings) };
   const spacing = formatLength(circuit.spacingMetres, settings);
   const each = result.circuits.flatMap((one, index) => {
@@ -57,8 +71,20 @@ function branchSteps(id: string, circuit: BranchCircuit, result: BranchResult, s
     const units = one.units.reduce((sum, unit) => sum + unit.quantity, 0);
     const name = circuit.luminaire || 'luminaire';
     return [
-      stepOf(id, 'breaker', { ...number, amps: figure(one.breakerAmps ?? circuit.breakerAmps, 'A', settings), curve: circuit.curve ?? '' }),
-      stepOf(id, 'home-run', { ...number, size: one.size ? formatWireSize(one.size) : '–', length: formatLength(circuit.metres, settings) }, wires),
+      stepOf(id, 'breaker', {
+        ...number,
+        rating: `${figure(one.breakerAmps ?? circuit.breakerAmps, 'A', settings)}${circuit.curve ? `, curve ${circuit.curve}` : ''}`,
+      }),
+      stepOf(
+        id,
+        'home-run',
+        {
+          ...number,
+          size: one.size ? formatWireSize(one.size) : '–',
+          length: formatLength(circuit.metres, settings),
+        },
+        wires,
+      ),
       stepOf(id, 'luminaires', { ...number, units, name, spacing }),
     ];
   });
@@ -116,7 +142,13 @@ export function stepsOfChange(id: string, retrofit: RetrofitWiring | null): Step
   const lines = retrofit?.label.lines ?? [];
   if (lines.length > 0)
     steps.push(
-      stepOf(id, 'fixture-label', {}, undefined, lines.map(({ key, values }) => ({ key, values }))),
+      stepOf(
+        id,
+        'fixture-label',
+        {},
+        undefined,
+        lines.map(({ key, values }) => ({ key, values })),
+      ),
     );
   return steps;
 }
