@@ -1,4 +1,5 @@
 'use client';
+import { PhotoStrip } from '@/components/photos/photo-strip';
 import { Button } from '@/components/ui/button';
 import { Sheet } from '@/components/ui/sheet';
 import type { Area } from '@/lib/surveys/schema';
@@ -126,6 +127,12 @@ export function AreaCard({
           <Coves areaId={area.id} survey={survey} />
           <ChangeLines areaId={area.id} survey={survey} />
           <Hazards area={area.data} set={set} />
+          <PhotoStrip
+            base={survey.photosUrl}
+            subject={{ type: 'area', id: area.id }}
+            name={area.data.name}
+            settings={survey.settings}
+          />
           <NotesField label="Notes" value={area.data.notes} onSave={(notes) => set({ notes })} />
           <div className="flex flex-wrap gap-3">
             <Button look="secondary" onClick={() => duplicate(area, survey)}>

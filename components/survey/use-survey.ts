@@ -27,6 +27,7 @@ type Figured = { answer: Answer | null; openStops: number };
 export interface Survey {
   offline: OfflineScope;
   ready: boolean;
+  photosUrl: string;
   extra: Extra | null;
   settings: ShopSettings;
   areas: Kept<Area>[];
@@ -86,6 +87,7 @@ export function useSurvey(options: { shopId: string; membershipId: string; jobId
   return {
     offline,
     ready: entities !== undefined,
+    photosUrl: `${base}/photos`,
     extra,
     settings: extra?.settings ?? DEFAULT_SETTINGS,
     ...of,

@@ -30,6 +30,8 @@ export const PLACES: Readonly<Record<string, Access>> = {
   '/api/v1/shops/[shop]/documents/[document]/pdf': 'price:see',
   '/api/v1/shops/[shop]/jobs/[job]/events': 'work:edit',
   '/api/v1/shops/[shop]/jobs/[job]/survey': 'work:edit',
+  '/api/v1/shops/[shop]/jobs/[job]/photos': 'work:edit',
+  '/api/v1/shops/[shop]/jobs/[job]/photos/[photo]': 'work:edit',
   '/l/[link]': 'link',
   '/l/[link]/accept': 'link',
   '/l/[link]/decline': 'link',

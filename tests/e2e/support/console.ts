@@ -6,7 +6,7 @@ export function quiet(page: Page, expected: RegExp[] = []): void {
     if (!expected.some((pattern) => pattern.test(text))) expect.soft(text, 'console').toBe('');
   };
   page.on('console', (message) => {
-    if (message.type() === 'error') note(message.text());
+    if (message.type() === 'error') note(`${message.text()} ${message.location().url}`);
   });
   page.on('pageerror', (error) => note(error.message));
 }
