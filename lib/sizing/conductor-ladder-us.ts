@@ -107,6 +107,8 @@ function rungOf(c: UsCase, size: string): Rung {
 function classFindings({ request, classTwo }: UsCase): Finding[] {
   const limitAmps = classTwoLimit(request);
   if (limitAmps === null) return [];
+  // A breaker that is given tells that the source is none of Class 2.
+  if (request.breakerAmps !== undefined && atMost(request.amps, limitAmps)) return [];
   const values = { amps: request.amps, limitAmps, volts: request.volts };
   if (classTwo)
     return [

@@ -29,6 +29,11 @@ function resultOf({ rung, governedBy }: Choice, ladder: Ladder): ConductorSize {
   };
 }
 
+/** How one rung's figures came about. */
+export function rungSteps(request: SizeRequest, ladder: Ladder, rung: Rung): WorkingStep[] {
+  return [...ladder.steps(rung), dropStep(request, rung, ladder)];
+}
+
 function dropStep(request: SizeRequest, rung: Rung, { celsius }: Ladder): WorkingStep {
   return {
     key: 'voltage-drop-percent',
@@ -72,7 +77,7 @@ export function conductorSize(request: SizeRequest): SizedConductor {
   return {
     result: resultOf(choice, ladder),
     findings: findingsOf(request, ladder, choice),
-    working: shown ? [...ladder.steps(shown), dropStep(request, shown, ladder)] : [],
+    working: shown ? rungSteps(request, ladder, shown) : [],
     choice,
     ladder,
   };

@@ -2,6 +2,7 @@
 import type { Calculation } from '@/lib/engine/contract';
 import { arrayAnalysisCalculation } from './array-analysis';
 import { arraySpreadCalculation } from './array-spread';
+import { branchCircuitCalculation } from './branch-circuit';
 import { conductorResistanceCalculation } from './conductor-resistance';
 import { conductorSizeCalculation } from './conductor-size';
 import { resistorArrayCalculation } from './resistor-array';
@@ -17,5 +18,6 @@ export const sizingCalculations = [
   arrayAnalysisCalculation,
   arraySpreadCalculation,
   tapeAnalysisCalculation,
+  branchCircuitCalculation,
   retrofitCheckCalculation,
 ] as unknown as Calculation[];

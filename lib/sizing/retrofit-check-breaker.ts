@@ -1,10 +1,8 @@
 /** The old breaker and control under the new load: steady current, and the inrush of many drivers at once. */
-import { atMost, type Finding, floorWithin } from '@/lib/engine/contract';
+import { atMost, type Finding } from '@/lib/engine/contract';
 import { caution, softStop } from '@/lib/engine/finding';
+import { INRUSH_BASIS, unitsByInrush } from './inrush';
 import { type RetrofitCase, takesProduct } from './retrofit-check-case';
-
-/** Lowest multiple of the rating at which a curve may trip at once. IEC 60898-1 trip bands, read in a summary. */
-export const INSTANT_TRIP = { B: 3, C: 5, D: 10 } as const;
 
 /** Lighting runs for three hours and more. NEC 210.20(A), read in an extract. */
 const CONTINUOUS = { us: 1.25, iec: 1 } as const;
@@ -12,11 +10,6 @@ const LOAD_BASIS = {
   us: 'NEC 210.20(A), continuous load at 125 %, read in an extract',
   iec: 'IEC 60364-4-43 433.1 (design current not above the rating), from memory',
 } as const;
-const INRUSH_BASIS = {
-  us: 'datasheet (units per breaker)',
-  iec: 'IEC 60898-1 trip bands with the maker’s figures',
-} as const;
-
 export interface BreakerFigures {
   voltAmpsBefore: number | null;
   voltAmpsAfter: number | null;
@@ -29,22 +22,9 @@ export interface BreakerFigures {
 
 const onBreaker = ({ input }: RetrofitCase) => input.breaker?.units ?? input.quantity;
 
-/**
- * US: the maker's count for the breaker. IEC: floor(unitsPerB16 * (In/16) * m/3) with m = 3 for B, 5 for C; or
- * floor(pulseFactor * m * In / inrushAmps). A D curve only from the breaker maker's pulse factor, or a count.
- */
-function unitsByInrush(c: RetrofitCase): number | null {
-  const { product, input } = c;
-  const { breaker } = input;
-  if (!product || !breaker) return null;
-  if (product.unitsPerBreaker !== undefined) return floorWithin(product.unitsPerBreaker);
-  if (input.basis === 'us' || breaker.curve === undefined) return null;
-  const multiple = INSTANT_TRIP[breaker.curve];
-  if (product.unitsPerB16 !== undefined && breaker.curve !== 'D')
-    return floorWithin((product.unitsPerB16 * breaker.amps * multiple) / (16 * 3));
-  if (product.pulseFactor !== undefined && product.inrushAmps !== undefined)
-    return floorWithin((product.pulseFactor * multiple * breaker.amps) / product.inrushAmps);
-  return null;
+/** null without a product, without a breaker, and where no maker's figure tells. */
+function mostByInrush({ product, input }: RetrofitCase): number | null {
+  return product && input.breaker ? unitsByInrush(input.basis, input.breaker, product) : null;
 }
 
 /** Volt-amps of the line before and after, and what flows through the breaker then. */
@@ -71,7 +51,7 @@ export function breakerFigures(c: RetrofitCase): BreakerFigures {
     voltAmpsBefore: before,
     voltAmpsAfter: after,
     ampsAfter: total === null || input.supplyVolts === null ? null : total / input.supplyVolts,
-    unitsByInrush: takesProduct(c) ? unitsByInrush(c) : null,
+    unitsByInrush: takesProduct(c) ? mostByInrush(c) : null,
     inrushAmps: inrush === undefined ? null : inrush * input.quantity,
   };
 }

@@ -20,7 +20,7 @@ export const findings = {
     '{amps:A} is asked of a Class 2 source that may give {limitAmps:A} at {volts:V}. Split the run over more outputs, or wire it as Class 1 or power wiring.',
   'finding.load-over-conductors.title': 'More than one cable carries',
   'finding.load-over-conductors.body':
-    '{size}, the largest here, carries {ampacity:A} in these surroundings: too little for {amps:A} behind {overcurrentAmps:A}. Split the load over more circuits.',
+    '{size}, the largest here, carries {ampacity:A} in these surroundings: too little for {amps:A} behind {overcurrentAmps:A}. Split the load over more circuits, each on a smaller {=breaker}.',
   'finding.ambient-too-hot.title': 'Too hot for this insulation',
   'finding.ambient-too-hot.body':
     'At {ambientCelsius:C} around the cable its insulation has nothing left to carry a current. Choose a hotter insulation, or another way for the cable.',
@@ -58,4 +58,23 @@ export const findings = {
   'finding.solid-as-stranded.body': '{size} is not made solid; the stranded row is used.',
   'finding.inputs-not-used.title': 'Not used here',
   'finding.inputs-not-used.body': 'These figures do not count in this answer: {keys}.',
+  'finding.unit-over-breaker.title': 'One unit is too much',
+  'finding.unit-over-breaker.body':
+    'One {name} alone is too much for a {breakerAmps:A} {=breaker}. Use a larger rating or another curve, or a driver with less inrush.',
+  'finding.rating-not-standard.title': 'Not a standard rating',
+  'finding.rating-not-standard.body': '{breakerAmps:A} is no standard rating. Look at the {=breaker} again.',
+  'finding.curve-taken-as-b.title': 'Curve taken as B',
+  'finding.curve-taken-as-b.body':
+    'The curve of the {breakerAmps:A} {=breaker} is not given. B is taken, which holds the fewest drivers.',
+  'finding.units-over-control.title': 'Too many units on the control',
+  'finding.units-over-control.body':
+    '{units} units start at once through one {control:word.control} that holds {unitsByControl}: its contacts weld. Add a relay, or share the load.',
+  'finding.conductor-under-breaker.title': 'Conductor too small for its {=breaker}',
+  'finding.conductor-under-breaker.body':
+    '{size} carries {ampacity:A} here: too little for {amps:A} behind {breakerAmps:A}. Fit a smaller {=breaker}, or rewire.',
+  'finding.load-before-and-after.title': 'Load before and after',
+  'finding.load-before-and-after.body': 'The circuit goes from {voltAmpsBefore:VA} to {voltAmpsAfter:VA}.',
+  'finding.load-grows.title': 'The load grows',
+  'finding.load-grows.body':
+    'The circuit goes from {voltAmpsBefore:VA} to {voltAmpsAfter:VA}. Look at all that hangs on it before more is added.',
 } as const;
