@@ -134,7 +134,7 @@ function Desk({ one, survey, back }: { one: Kept<CircuitBody>; survey: Survey; b
     [data.kind, data.electrical, survey.settings],
   );
   const area = survey.areas.find((each) => each.id === data.areaId);
-  const save = (change: Partial<CircuitBody>) => survey.save('circuits', one.id, { ...data, ...change });
+  const save = (change: Partial<CircuitBody>) => survey.edit('circuits', one, change);
   return (
     <div className="grid items-start gap-5 lg:grid-cols-[22rem_1fr]">
       <Sheet title={data.name}>

@@ -67,7 +67,7 @@ function Row({ one, survey, href }: { one: Kept<CircuitBody>; survey: Survey; hr
         <ButtonLink look="secondary" href={href}>
           Open<span className="sr-only"> {one.data.name}</span>
         </ButtonLink>
-        <Button look="danger" onClick={() => survey.archive('circuits', one.id, one.data)}>
+        <Button look="danger" onClick={() => survey.archive('circuits', one)}>
           Take out<span className="sr-only"> {one.data.name}</span>
         </Button>
       </div>
@@ -88,7 +88,7 @@ export function CircuitList(props: { shopId: string; membershipId: string; jobId
   const add = () => {
     if (!area) return;
     const id = crypto.randomUUID();
-    survey.save('circuits', id, newCircuit(survey, area.id, kind));
+    survey.add('circuits', id, newCircuit(survey, area.id, kind));
     router.push(`${base}/${id}`);
   };
   return (

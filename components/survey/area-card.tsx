@@ -32,13 +32,13 @@ function summary(area: Area, survey: Survey, id: string): string {
 /** An area again, with what hangs in it: for rooms that are alike. */
 function duplicate(area: Kept<Area>, survey: Survey): void {
   const id = crypto.randomUUID();
-  survey.save('areas', id, {
+  survey.add('areas', id, {
     ...area.data,
     name: `${area.data.name} (again)`,
     position: area.data.position + 1,
   });
   for (const one of survey.luminaires.filter((luminaire) => luminaire.data.areaId === area.id))
-    survey.save('luminaires', crypto.randomUUID(), { ...one.data, areaId: id, countConfidence: 'estimated' });
+    survey.add('luminaires', crypto.randomUUID(), { ...one.data, areaId: id, countConfidence: 'estimated' });
 }
 
 function Sizes({ area, survey, set }: { area: Area; survey: Survey; set: (change: Partial<Area>) => void }) {
@@ -98,7 +98,7 @@ export function AreaCard({
   open: boolean;
   onToggle: () => void;
 }) {
-  const set = (change: Partial<Area>) => survey.save('areas', area.id, { ...area.data, ...change });
+  const set = (change: Partial<Area>) => survey.edit('areas', area, change);
   return (
     <Sheet>
       <div className="flex flex-wrap items-center justify-between gap-3">
@@ -138,7 +138,7 @@ export function AreaCard({
             <Button look="secondary" onClick={() => duplicate(area, survey)}>
               Duplicate this area
             </Button>
-            <Button look="danger" onClick={() => survey.archive('areas', area.id, area.data)}>
+            <Button look="danger" onClick={() => survey.archive('areas', area)}>
               Take this area out
             </Button>
           </div>

@@ -57,8 +57,7 @@ function check(line: ChangeLine, survey: Survey): Answer | null {
 }
 
 function Entry({ one, survey }: { one: Kept<ChangeLine>; survey: Survey }) {
-  const set = (change: Partial<ChangeLine>) =>
-    survey.save('change-lines', one.id, { ...one.data, ...change });
+  const set = (change: Partial<ChangeLine>) => survey.edit('change-lines', one, change);
   const wiring = (change: Partial<ChangeElectrical>) =>
     set({ electrical: { ...one.data.electrical, ...change } });
   const answer = useMemo(() => check(one.data, survey), [one.data, survey]);
@@ -155,7 +154,7 @@ function Entry({ one, survey }: { one: Kept<ChangeLine>; survey: Survey }) {
         </div>
       ) : null}
       <div>
-        <Button look="danger" onClick={() => survey.archive('change-lines', one.id, one.data)}>
+        <Button look="danger" onClick={() => survey.archive('change-lines', one)}>
           Take out<span className="sr-only"> {name}</span>
         </Button>
       </div>
@@ -168,7 +167,7 @@ export function ChangeLines({ areaId, survey }: { areaId: string; survey: Survey
   const add = () => {
     const used = new Set(here.map((one) => one.data.existingLuminaireId));
     const next = survey.luminaires.find((one) => one.data.areaId === areaId && !used.has(one.id));
-    survey.save('change-lines', crypto.randomUUID(), {
+    survey.add('change-lines', crypto.randomUUID(), {
       areaId,
       existingLuminaireId: next?.id ?? null,
       circuitId: null,

@@ -8,7 +8,7 @@ import type { Survey } from './use-survey';
 export function Coves({ areaId, survey }: { areaId: string; survey: Survey }) {
   const here = survey.coves.filter((one) => one.data.areaId === areaId);
   const add = () =>
-    survey.save('coves', crypto.randomUUID(), {
+    survey.add('coves', crypto.randomUUID(), {
       areaId,
       name: `Cove ${here.length + 1}`,
       tapeMetres: 3,
@@ -20,7 +20,7 @@ export function Coves({ areaId, survey }: { areaId: string; survey: Survey }) {
       <h3 className="mb-2 text-xl">Coves and tape lengths</h3>
       <ul>
         {here.map((one) => {
-          const set = (change: Partial<Cove>) => survey.save('coves', one.id, { ...one.data, ...change });
+          const set = (change: Partial<Cove>) => survey.edit('coves', one, change);
           return (
             <li
               key={one.id}
@@ -47,11 +47,7 @@ export function Coves({ areaId, survey }: { areaId: string; survey: Survey }) {
                 value={one.data.driverMetres}
                 onSave={(driverMetres) => set({ driverMetres: driverMetres ?? 0 })}
               />
-              <Button
-                look="danger"
-                className="self-end"
-                onClick={() => survey.archive('coves', one.id, one.data)}
-              >
+              <Button look="danger" className="self-end" onClick={() => survey.archive('coves', one)}>
                 Take out<span className="sr-only"> {one.data.name}</span>
               </Button>
             </li>

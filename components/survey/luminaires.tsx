@@ -124,7 +124,7 @@ function Wiring({ value, set }: { value: Luminaire; set: (change: Partial<Lumina
 }
 
 function Entry({ one, survey }: { one: Kept<Luminaire>; survey: Survey }) {
-  const set = (change: Partial<Luminaire>) => survey.save('luminaires', one.id, { ...one.data, ...change });
+  const set = (change: Partial<Luminaire>) => survey.edit('luminaires', one, change);
   return (
     <li className="flex flex-col gap-3 border-t border-rule py-4">
       <div className="grid items-start gap-3 sm:grid-cols-[2fr_auto_1fr_1fr_1fr]">
@@ -159,7 +159,7 @@ function Entry({ one, survey }: { one: Kept<Luminaire>; survey: Survey }) {
       </div>
       <Wiring value={one.data} set={set} />
       <div>
-        <Button look="danger" onClick={() => survey.archive('luminaires', one.id, one.data)}>
+        <Button look="danger" onClick={() => survey.archive('luminaires', one)}>
           Take out<span className="sr-only"> {one.data.luminaireType}</span>
         </Button>
       </div>
@@ -173,7 +173,7 @@ export function Luminaires({ areaId, survey }: { areaId: string; survey: Survey 
   const here = survey.luminaires.filter((one) => one.data.areaId === areaId);
   const add = () => {
     if (type.trim() === '') return;
-    survey.save('luminaires', crypto.randomUUID(), fresh(areaId, type.trim(), survey));
+    survey.add('luminaires', crypto.randomUUID(), fresh(areaId, type.trim(), survey));
     setType('');
   };
   return (

@@ -12,7 +12,7 @@ function addArea(survey: Survey): string {
   const id = crypto.randomUUID();
   const position =
     survey.areas.length > 0 ? Math.max(...survey.areas.map((area) => area.data.position)) + 1 : 0;
-  survey.save('areas', id, {
+  survey.add('areas', id, {
     position,
     name: `Area ${survey.areas.length + 1}`,
     use: '',

@@ -35,8 +35,11 @@ export interface Survey {
   coves: Kept<Cove>[];
   circuits: Kept<CircuitBody & Figured>[];
   changeLines: Kept<ChangeLine & Figured>[];
-  save: (collection: Collection, id: string, data: object) => void;
-  archive: (collection: Collection, id: string, data: object) => void;
+  /** A new entry. */
+  add: (collection: Collection, id: string, data: object) => void;
+  /** An edit of what is shown: only what it changed is written. */
+  edit: <T extends object>(collection: Collection, one: Kept<T>, change: Partial<T>) => void;
+  archive: <T extends object>(collection: Collection, one: Kept<T>) => void;
 }
 
 const SERVER_ONLY = new Set(['answer', 'openStops']);
@@ -73,15 +76,31 @@ export function useSurvey(options: { shopId: string; membershipId: string; jobId
     };
   }, [entities]);
 
-  const save = useCallback(
-    (collection: Collection, id: string, data: object) =>
-      void putEntity(store, { scope: jobId, collection, id, data: bodyOf(data) }).then(nudge),
+  const put = useCallback(
+    (collection: Collection, id: string, data: object, base?: object, archived = false) =>
+      void putEntity(store, {
+        scope: jobId,
+        collection,
+        id,
+        data: bodyOf(data),
+        archived,
+        ...(base ? { base: bodyOf(base) } : {}),
+      }).then(nudge),
     [store, jobId, nudge],
   );
+  const add = useCallback(
+    (collection: Collection, id: string, data: object) => put(collection, id, data),
+    [put],
+  );
+  const edit = useCallback(
+    <T extends object>(collection: Collection, one: Kept<T>, change: Partial<T>) =>
+      put(collection, one.id, { ...one.data, ...change }, one.data),
+    [put],
+  );
   const archive = useCallback(
-    (collection: Collection, id: string, data: object) =>
-      void putEntity(store, { scope: jobId, collection, id, data: bodyOf(data), archived: true }).then(nudge),
-    [store, jobId, nudge],
+    <T extends object>(collection: Collection, one: Kept<T>) =>
+      put(collection, one.id, one.data, one.data, true),
+    [put],
   );
 
   return {
@@ -91,7 +110,8 @@ export function useSurvey(options: { shopId: string; membershipId: string; jobId
     extra,
     settings: extra?.settings ?? DEFAULT_SETTINGS,
     ...of,
-    save,
+    add,
+    edit,
     archive,
   };
 }

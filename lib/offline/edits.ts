@@ -1,4 +1,5 @@
 /** Edits on the device: shown at once, queued as events, coalesced while they have not been sent. */
+import { changesBetween, withChanges } from './patch';
 import type { Entity } from './protocol';
 import type { OfflineStore, QueuedEvent } from './store';
 
@@ -7,17 +8,29 @@ interface Edit {
   collection: string;
   id: string;
   data: Record<string, unknown>;
+  /** What the screen showed when the edit was made: only what differs from it is written. Left out for a new one. */
+  base?: Record<string, unknown>;
   archived?: boolean;
 }
 
 const now = () => new Date().toISOString();
 
+function editedData(
+  { data, base }: Edit,
+  stored: Record<string, unknown> | undefined,
+): Record<string, unknown> {
+  if (!base || !stored) return data;
+  const changes = changesBetween(base, data);
+  return changes ? withChanges(stored, changes) : stored;
+}
+
 /** Applies an edit to the local copy and queues it. Typing on changes the event that still waits. */
 export async function putEntity(store: OfflineStore, edit: Edit): Promise<void> {
-  const { scope, collection, id, data, archived = false } = edit;
+  const { scope, collection, id, archived = false } = edit;
   const kind = `${collection}.${archived ? 'archive' : 'put'}`;
   await store.transaction('rw', store.entities, store.queue, async () => {
     const before = await store.entities.get([scope, collection, id]);
+    const data = editedData(edit, before?.data);
     await store.entities.put({
       scope,
       collection,

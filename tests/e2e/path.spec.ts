@@ -104,16 +104,16 @@ test('one job from site survey to paid final invoice', async ({ page, browser })
       await expect(page.getByRole('heading', { name: 'Circuit desk' })).toBeVisible();
     };
     await start('Back room', 'Branch circuit');
-    await page.getByLabel('Luminaire').selectOption({ label: 'Flat panel 2 x 4 ft, 35 W' });
+    await page.getByLabel('Luminaire', { exact: true }).selectOption({ label: 'Flat panel 2 x 4 ft, 35 W' });
     await page.getByLabel('How many').fill('12');
-    await page.getByLabel('Cable').selectOption({ label: 'Cable 12 AWG, 2 core with ground' });
+    await page.getByLabel('Cable', { exact: true }).selectOption({ label: 'Cable 12 AWG, 2 core with ground' });
     await expect(page.getByRole('img', { name: /From the panel/ })).toBeVisible();
     await saved(page);
 
     await start('Counter', 'Tape run');
     await page.getByLabel('Tape', { exact: true }).selectOption({ label: 'Tape 24 V, 14.4 W/m, 2700 K' });
     await page.getByLabel('Driver', { exact: true }).selectOption({ label: 'Driver 24 V, 96 W, Class 2' });
-    await page.getByLabel('Cable').selectOption({ label: 'Cable 16 AWG, 2 core' });
+    await page.getByLabel('Cable', { exact: true }).selectOption({ label: 'Cable 16 AWG, 2 core' });
     // A limit that the run misses: a stop, with what to do about it one press away.
     await page.getByLabel('Limit of drop').fill('2');
     await expect(page.getByText('Far end too low')).toBeVisible();

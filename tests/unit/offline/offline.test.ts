@@ -160,3 +160,36 @@ describe('offline queue', () => {
     expect(await wipeOffline(true)).toBe(true);
   });
 });
+
+describe('edits of what a screen showed a moment ago', () => {
+  it('never undo a field that was typed in between', async () => {
+    const shown = { name: 'Area 1', size: null, electrical: { ballast: 'unknown', dimmer: 'none' } };
+    const put = (data: Record<string, unknown>, base?: Record<string, unknown>) =>
+      putEntity(store, { scope, collection: 'areas', id, data, ...(base ? { base } : {}) });
+    await put(shown);
+    // Three edits from one and the same render.
+    await put({ ...shown, name: 'Back room' }, shown);
+    await put({ ...shown, size: 9 }, shown);
+    await put({ ...shown, electrical: { ...shown.electrical, ballast: 'magnetic' } }, shown);
+    expect((await store.entities.get([scope, 'areas', id]))?.data).toEqual({
+      name: 'Back room',
+      size: 9,
+      electrical: { ballast: 'magnetic', dimmer: 'none' },
+    });
+    expect(await store.queue.count()).toBe(1);
+    expect((await store.queue.toArray())[0]?.body['name']).toBe('Back room');
+  });
+
+  it('take out a key that the edit took out', async () => {
+    const shown = { roles: { tape: 'a', driver: 'b' } };
+    await putEntity(store, { scope, collection: 'circuits', id, data: shown });
+    await putEntity(store, {
+      scope,
+      collection: 'circuits',
+      id,
+      data: { roles: { tape: 'a' } },
+      base: shown,
+    });
+    expect((await store.entities.get([scope, 'circuits', id]))?.data).toEqual({ roles: { tape: 'a' } });
+  });
+});

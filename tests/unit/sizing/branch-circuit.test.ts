@@ -293,6 +293,14 @@ describe('what is said', () => {
       ),
     ).toHaveLength(1));
 
+  it('asks once for all loads whose inrush is not known', () => {
+    const loads = ['a', 'b', 'c'].map((name) =>
+      load({ name, ...(name === 'b' ? {} : { unitsPerBreaker: undefined }) }),
+    );
+    const asked = us({ loads }).findings.filter(({ code }) => code === 'inrush-not-checked');
+    expect(asked.map(({ values }) => values)).toEqual([{ names: 'a, c', units: 60, breakerAmps: 20 }]);
+  });
+
   it('answers nothing but the stop where one unit is too much', () => {
     const { result } = us({}, { voltAmps: 2000 });
     expect(result).toEqual({ circuits: [], unitsByLoad: 0, unitsByInrush: 50, governedBy: 'load' });

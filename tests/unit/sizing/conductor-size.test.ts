@@ -237,6 +237,12 @@ describe('IEC basis', () => {
     expect(loop.result.zsOhms).toBeLessThan(loop.result.zsMaxOhms ?? 0);
   });
 
+  it('figures the fault loop hot, however cool the drop is figured', () => {
+    const cool = iec({ celsius: 20 }).result;
+    expect(cool.zsOhms).toBe(iec().result.zsOhms);
+    expect(cool.dropPct).toBeLessThan(iec().result.dropPct ?? 0);
+  });
+
   it('reckons with another protective conductor', () => {
     const thin = iec({ protectiveSize: '1 mm2' }).result;
     const factor = 1 + 50 * 0.00393;
