@@ -23,24 +23,30 @@ export function unitTooLarge({ input }: BranchCase, { load, byLoad, byInrush }: 
   );
 }
 
-function inrushUnchecked({ input }: BranchCase, limit: LoadLimits): Finding[] {
-  const { load, byBreakerInrush, byControlInrush } = limit;
+/** Once for all loads without a figure, by name: the answer is one question to each maker. */
+function inrushUnchecked({ input, limits }: BranchCase): Finding[] {
+  const without = (by: 'byBreakerInrush' | 'byControlInrush') => {
+    const loads = limits.filter((limit) => limit[by] === null).map(({ load }) => load);
+    const names = loads.map(({ name }) => name).join(', ');
+    return { names, units: loads.reduce((sum, { quantity }) => sum + quantity, 0) };
+  };
+  const [breaker, control] = [without('byBreakerInrush'), without('byControlInrush')];
   const findings: Finding[] = [];
-  if (byBreakerInrush === null)
+  if (breaker.units > 0)
     findings.push(
       caution(
         'inrush-not-checked',
-        `Inrush not checked: ask the maker of ${load.name} for the most units on this breaker.`,
-        { name: load.name, units: load.quantity, breakerAmps: input.breakerAmps },
+        `Inrush not checked: ask the maker for the most units on this breaker (${breaker.names}).`,
+        { ...breaker, breakerAmps: input.breakerAmps },
         INRUSH_BASIS[input.basis],
       ),
     );
-  if (input.control && byControlInrush === null)
+  if (input.control && control.units > 0)
     findings.push(
       caution(
         'control-inrush-not-checked',
-        `The inrush of ${load.name} through the control is not checked: compare with its listed rating.`,
-        { control: input.control.kind ?? 'switch', name: load.name },
+        `The inrush through the control is not checked: compare with its listed rating (${control.names}).`,
+        { ...control, control: input.control.kind ?? 'switch' },
         CONTROL_BASIS,
       ),
     );
@@ -91,11 +97,7 @@ function breakerNotes(c: BranchCase): Finding[] {
 
 /** What the loads and the breaker say, whatever the circuits. */
 export function loadFindings(c: BranchCase): Finding[] {
-  return [
-    ...c.limits.flatMap((limit) => supplyFinding(c, limit)),
-    ...c.limits.flatMap((limit) => inrushUnchecked(c, limit)),
-    ...breakerNotes(c),
-  ];
+  return [...c.limits.flatMap((limit) => supplyFinding(c, limit)), ...inrushUnchecked(c), ...breakerNotes(c)];
 }
 
 /** Each code once, from the circuit that shows it first: the fullest come first. */

@@ -90,8 +90,10 @@ function protectiveSize({ request }: IecCase, size: string): string {
 }
 
 function loop(c: IecCase, size: string): { line: number; protective: number; zsOhms: number } | null {
-  const { request, celsius } = c;
+  const { request } = c;
   if (request.zeOhms === undefined) return null;
+  // At what the insulation may reach, however cool the drop is figured: a fault comes on a loaded conductor too.
+  const celsius = CONDUCTOR_CELSIUS[c.insulation];
   const stranding = request.stranding ?? 'stranded';
   const line = conductorResistance(size, stranding, celsius).ohmsPerMetre;
   const protective = conductorResistance(protectiveSize(c, size), stranding, celsius).ohmsPerMetre;
@@ -131,7 +133,7 @@ function findingsOf(c: IecCase): Finding[] {
       note(
         'fault-loop-not-checked',
         'The fault loop is not checked: give zeOhms and the curve of the breaker.',
-        { metres: request.metres },
+        { metres: request.faultMetres ?? request.metres },
         IEC_FAULT_BASIS,
       ),
     );
