@@ -21,7 +21,9 @@ function editedData(
 ): Record<string, unknown> {
   if (!base || !stored) return data;
   const changes = changesBetween(base, data);
-  return changes ? withChanges(stored, changes) : stored;
+  const merged = changes ? withChanges(stored, changes) : stored;
+  // What the server alone writes lies in the store too, and is not sent back to it: an edit names all of its fields.
+  return Object.fromEntries(Object.entries(merged).filter(([key]) => key in data));
 }
 
 /** Applies an edit to the local copy and queues it. Typing on changes the event that still waits. */

@@ -44,7 +44,7 @@ async function payByTestCard(page: Page): Promise<void> {
 }
 
 test('one job from site survey to paid final invoice', async ({ page, browser }) => {
-  test.setTimeout(180_000);
+  test.setTimeout(100_000);
   quiet(page, [/401/]);
   await signInByScreen(page, shop.email('owner'));
   const base = `/s/${shop.shopId}`;

@@ -192,4 +192,18 @@ describe('edits of what a screen showed a moment ago', () => {
     });
     expect((await store.entities.get([scope, 'circuits', id]))?.data).toEqual({ roles: { tape: 'a' } });
   });
+
+  it('do not send back what the server alone writes', async () => {
+    await store.entities.put({
+      scope,
+      collection: 'areas',
+      id,
+      version: 3,
+      archived: false,
+      dirty: 0,
+      data: { name: 'A', answer: { figured: 1 } },
+    });
+    await putEntity(store, { scope, collection: 'areas', id, data: { name: 'B' }, base: { name: 'A' } });
+    expect((await store.queue.toArray())[0]?.body).toEqual({ name: 'B' });
+  });
 });
