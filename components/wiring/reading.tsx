@@ -106,14 +106,19 @@ function Entry({
       )}
       {shown === null ? null : <Verdict reading={reading} value={shown} sheet={sheet} />}
       {measured && text === null ? <Kept measured={measured} sheet={sheet} /> : null}
-      <TextInput
-        id={`${id}-note`}
-        label={t('wiring.reading.note')}
-        value={note}
-        maxLength={500}
-        disabled={!sheet.acknowledged}
-        onChange={(event) => setNote(event.target.value)}
-      />
+      <details>
+        <summary className="inline-flex min-h-touch items-center underline">
+          {t('wiring.reading.note')}
+        </summary>
+        <TextInput
+          id={`${id}-note`}
+          label={t('wiring.reading.note-label')}
+          value={note}
+          maxLength={500}
+          disabled={!sheet.acknowledged}
+          onChange={(event) => setNote(event.target.value)}
+        />
+      </details>
       <div className="flex flex-wrap gap-3">
         {barred ? null : (
           <Button type="submit" disabled={typed === null || !sheet.acknowledged}>

@@ -23,27 +23,22 @@ const SWATCH: Record<Conductor['colour'], string> = {
 function Conductors({ step, sheet }: { step: Step; sheet: SheetOnPhone }) {
   const { t } = sheet;
   return (
-    <>
-      <ul className="mt-2 flex flex-wrap gap-x-5 gap-y-2">
-        {step.conductors.map(({ role, colour }) => (
-          <li key={role} className="flex items-center gap-2">
-            <span
-              aria-hidden
-              className="inline-block h-4 w-9 rounded-sm border border-ink"
-              style={{ background: SWATCH[colour] }}
-            />
-            <span>
-              {t(`wiring.colour.${colour}` as MessageKey)}
-              {': '}
-              <strong>{t(`wiring.role.${role}` as MessageKey)}</strong>
-            </span>
-          </li>
-        ))}
-      </ul>
-      <p className="mt-1 text-sm text-ink-2">
-        {t('wiring.colours.source', { source: step.conductorSource })}
-      </p>
-    </>
+    <ul className="mt-2 flex flex-wrap gap-x-5 gap-y-2">
+      {step.conductors.map(({ role, colour }) => (
+        <li key={role} className="flex items-center gap-2">
+          <span
+            aria-hidden
+            className="inline-block h-4 w-9 rounded-sm border border-ink"
+            style={{ background: SWATCH[colour] }}
+          />
+          <span>
+            {t(`wiring.colour.${colour}` as MessageKey)}
+            {': '}
+            <strong>{t(`wiring.role.${role}` as MessageKey)}</strong>
+          </span>
+        </li>
+      ))}
+    </ul>
   );
 }
 
@@ -97,6 +92,7 @@ function StepRow({ step, sheet }: { step: Step; sheet: SheetOnPhone }) {
 
 export function Steps({ steps, sheet }: { steps: readonly Step[]; sheet: SheetOnPhone }) {
   const waits = !sheet.open && sheet.progress.signedOff === null;
+  const sources = [...new Set(steps.map((step) => step.conductorSource).filter(Boolean))];
   return (
     <div>
       {waits ? <p className="mb-2 text-ink-2">{sheet.t('wiring.steps.first')}</p> : null}
@@ -105,6 +101,11 @@ export function Steps({ steps, sheet }: { steps: readonly Step[]; sheet: SheetOn
           <StepRow key={step.id} step={step} sheet={sheet} />
         ))}
       </ul>
+      {sources.map((source) => (
+        <p key={source} className="text-sm text-ink-2">
+          {sheet.t('wiring.colours.source', { source })}
+        </p>
+      ))}
     </div>
   );
 }

@@ -39,7 +39,7 @@ function Copies({ shop, install }: { shop: string; install: Install }) {
             <span>{index === 0 ? 'in force' : 'superseded'}</span>
             <span className="text-ink-2">{formatDateTime(copy.createdAt, install.settings)}</span>
           </p>
-          <p className="font-mono text-sm break-all text-ink-2">SHA-256 {copy.sha256}</p>
+          <p className="font-mono text-xs break-all text-ink-2">SHA-256 {copy.sha256}</p>
         </li>
       ))}
     </ul>
@@ -65,7 +65,7 @@ export default async function InstallPage({ params }: { params: Promise<{ shop: 
       <Sheet>
         <JobLine steps={jobLineSteps(job.steps)} size="large" />
       </Sheet>
-      <div className="grid items-start gap-5 lg:grid-cols-2">
+      <div className="grid items-start gap-5 *:min-w-0 lg:grid-cols-2">
         <Sheet title="Visits">
           <VisitList
             shopId={shop}
