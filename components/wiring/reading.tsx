@@ -71,7 +71,8 @@ function Entry({
 }) {
   const { t } = sheet;
   const id = useId();
-  const { factor, unit } = scaleOf(reading);
+  const scale = scaleOf(reading);
+  const { factor, unit } = scale;
   const [text, setText] = useState<string | null>(null);
   const [note, setNote] = useState('');
   const parsed = text === null || text.trim() === '' ? null : parseNumber(text);
@@ -104,7 +105,11 @@ function Entry({
           onChange={(event) => setText(event.target.value)}
         />
       )}
-      {shown === null ? null : <Verdict reading={reading} value={shown} sheet={sheet} />}
+      {shown === null ? (
+        <BandScale band={reading} value={null} {...scale} />
+      ) : (
+        <Verdict reading={reading} value={shown} sheet={sheet} />
+      )}
       {measured && text === null ? <Kept measured={measured} sheet={sheet} /> : null}
       <details>
         <summary className="inline-flex min-h-touch items-center underline">

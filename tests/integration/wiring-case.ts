@@ -20,19 +20,18 @@ export async function wiringShop(): Promise<QuoteShop & { run: object }> {
   return { ...shop, run };
 }
 
-/** Surveyed with a tape run and an array, and a line of lamps in old fixtures. */
+/** Surveyed with a circuit of each kind. */
 export async function surveyedJob(shop: QuoteShop & { run: object }, ports: FakeSources): Promise<string> {
   const jobId = await draftedJob(shop, ports);
   const pen = new SurveyPen(shop.estimator, jobId);
   const area = await pen.area(0, 'Counter', [8, 4, 3], 60, { hazards: { suspectCeiling: 'yes' } });
   await pen.circuit(area, 'tape-run', 'Counter cove', shop.run, {});
+  await pen.circuit(area, 'branch-circuit', 'Back room lights', { quantity: 12, voltAmps: 37 }, {});
   await pen.circuit(area, 'resistor-array', 'Sign', { supplyVolts: 12.6, count: 6 }, {});
   return jobId;
 }
 
-export async function acceptedJob(shop: QuoteShop & { run: object }): Promise<string> {
-  const ports = new FakeSources();
-  const jobId = await surveyedJob(shop, ports);
+export async function acceptQuoteOf(shop: QuoteShop, jobId: string, ports: FakeSources): Promise<void> {
   const { documentId } = await sendAsIs(shop, jobId, ports);
   await recordAcceptance(shop.office, {
     jobId,
@@ -41,6 +40,12 @@ export async function acceptedJob(shop: QuoteShop & { run: object }): Promise<st
     reference: 'PO 1',
     choices: [],
   });
+}
+
+export async function acceptedJob(shop: QuoteShop & { run: object }): Promise<string> {
+  const ports = new FakeSources();
+  const jobId = await surveyedJob(shop, ports);
+  await acceptQuoteOf(shop, jobId, ports);
   return jobId;
 }
 

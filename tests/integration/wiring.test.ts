@@ -10,8 +10,10 @@ import { sha256 } from '@/lib/platform/http/hash';
 import { applySheetEvents, releaseSheet } from '@/lib/wiring/commands';
 import { loadInstall, loadSheet } from '@/lib/wiring/queries';
 import { readingsOfSheet, stepsOfSheet } from '@/lib/wiring/schema/sheet';
-import { asMigrator, FakeSources, quoteShop } from '../support/quotes';
-import { acceptedJob, goTo, sheetEvent, surveyedJob, wiringShop } from './wiring-case';
+import { asMigrator, draftedJob, FakeSources, quoteShop } from '../support/quotes';
+import { overrideFinding } from '@/lib/surveys/commands';
+import { SurveyPen } from '@/seeders/demo';
+import { acceptedJob, acceptQuoteOf, goTo, sheetEvent, surveyedJob, wiringShop } from './wiring-case';
 
 let shop: Awaited<ReturnType<typeof wiringShop>>;
 let jobId: string;
@@ -74,7 +76,35 @@ describe('a release', () => {
       expect(low).toBeLessThan(nominal);
       expect(high).toBeGreaterThan(nominal);
     }
-    expect(sheet.overridden).toEqual([]);
+    expect(sheet.circuits.map((circuit) => circuit.kind).sort()).toEqual([
+      'branch-circuit',
+      'resistor-array',
+      'tape-run',
+    ]);
+  });
+
+  it('says which stop stands on whose word, and why', async () => {
+    const ports = new FakeSources();
+    const dim = await draftedJob(shop, ports);
+    const pen = new SurveyPen(shop.estimator, dim);
+    const area = await pen.area(0, 'Long cove', [12, 4, 3], 60);
+    const long = { ...shop.run, runMetres: 6, feed: 'start', maxDropPct: 1 };
+    const subjectId = await pen.circuit(area, 'tape-run', 'Long run', long, {});
+    const licensed = { ...shop.owner, licenceNumber: 'EC-1' };
+    const reason = 'Dim by wish of the customer.';
+    for (const code of ['far-end-too-low', 'dimmest-too-dim', 'driver-overloaded'])
+      await overrideFinding(licensed, { jobId: dim, subjectType: 'circuit', subjectId, code, reason }).catch(
+        () => null,
+      );
+    await acceptQuoteOf(shop, dim, ports);
+    const { id } = await releaseSheet(shop.owner, dim);
+    const [first] = (await loadSheet(shop.owner, id)).sheet.overridden;
+    expect(first).toMatchObject({
+      code: 'far-end-too-low',
+      subject: 'Long run',
+      reason,
+      licenceNumber: 'EC-1',
+    });
   });
 
   it('supersedes the copy before, on which nobody signs off any more', async () => {
@@ -176,6 +206,17 @@ describe('the crew’s events', () => {
     });
   });
 
+  it('on the mains side are measured by people marked qualified; others say “not measured”', async () => {
+    const { sheet } = await loadSheet(shop.crew, sheetId);
+    const mains = readingsOfSheet(sheet).find((reading) => reading.mains);
+    const body = { target: mains?.id, value: mains?.nominal, note: '' };
+    expect(await send('reading', body)).toMatchObject({ status: 403 });
+    expect(await send('reading', { ...body, value: null })).toMatchObject({ status: 200 });
+    expect(await send('reading', body, { ...shop.crew, mainsQualified: true })).toMatchObject({
+      status: 200,
+    });
+  });
+
   it('are never changed in the database', async () => {
     await expect(
       asMigrator('update sheet_events set target = $$y$$ where sheet_id = $1', [sheetId]),
@@ -191,7 +232,11 @@ describe('the crew’s events', () => {
       message: expect.stringContaining('reading'),
     });
     const readings = readingsOfSheet(sheet).map((reading, index) =>
-      sheetEvent('reading', { target: reading.id, value: index === 0 ? null : reading.nominal, note: '' }),
+      sheetEvent('reading', {
+        target: reading.id,
+        value: reading.mains || index === 1 ? null : reading.nominal,
+        note: '',
+      }),
     );
     const answers = await applySheetEvents(shop.crew, sheetId, readings);
     expect(answers.every((answer) => answer.status === 200)).toBe(true);
