@@ -20,6 +20,7 @@ export default defineConfig({
   reporter: [['line'], ['json']],
   use: {
     baseURL,
+    actionTimeout: 10_000,
     locale: 'en-US',
     screenshot: 'only-on-failure',
     trace: 'retain-on-failure',

@@ -4,6 +4,7 @@ import { addParts } from '@/seeders/demo';
 import { makeShop, PASSWORD, type TestShop } from '../support/shop';
 import { quiet } from './support/console';
 import { linkIn, mailTo } from './support/mail';
+import { signIn } from './support/signed-in';
 
 const CUSTOMER_MAIL = 'ines@tarnlane.example.com';
 const SIGN = 'Sign and accept';
@@ -106,7 +107,9 @@ test('one job from site survey to paid final invoice', async ({ page, browser })
     await start('Back room', 'Branch circuit');
     await page.getByLabel('Luminaire', { exact: true }).selectOption({ label: 'Flat panel 2 x 4 ft, 35 W' });
     await page.getByLabel('How many').fill('12');
-    await page.getByLabel('Cable', { exact: true }).selectOption({ label: 'Cable 12 AWG, 2 core with ground' });
+    await page
+      .getByLabel('Cable', { exact: true })
+      .selectOption({ label: 'Cable 12 AWG, 2 core with ground' });
     await expect(page.getByRole('img', { name: /From the panel/ })).toBeVisible();
     await saved(page);
 
@@ -138,6 +141,7 @@ test('one job from site survey to paid final invoice', async ({ page, browser })
     await page.goto(`${job}/quote`);
     await page.getByRole('button', { name: 'Start the draft' }).click();
     await expect(page.getByText(/12 × Flat panel/).first()).toBeVisible();
+    await page.getByText('Type a line').click();
     await page
       .getByLabel('What the customer reads')
       .last()
@@ -180,5 +184,67 @@ test('one job from site survey to paid final invoice', async ({ page, browser })
     await mailTo(CUSTOMER_MAIL, /^Received: .* for invoice 1001/);
     await page.goto(`${job}/money`);
     await expect(page.getByText('✓ paid')).toBeVisible();
+  });
+
+  const crewPhone = await browser.newContext({
+    viewport: { width: 360, height: 780 },
+    colorScheme: 'dark',
+    hasTouch: true,
+  });
+  const crew = await crewPhone.newPage();
+  quiet(crew);
+
+  await test.step('a visit with crew, and the wiring sheet released', async () => {
+    await page.goto(`${job}/install`);
+    await page.getByLabel('Starts').fill('2030-03-04T08:00');
+    await page.getByLabel('Ends').fill('2030-03-04T16:00');
+    await page.getByRole('checkbox', { name: /^crew/ }).check();
+    await page.getByRole('button', { name: 'Plan the visit' }).click();
+    await expect(page.getByText(/Mar 4, 2030/).first()).toBeVisible();
+    await page.getByRole('button', { name: 'Release the wiring sheet' }).click();
+    await expect(page.getByText(/copy 1|Copy 1|revision 1|Revision 1/).first()).toBeVisible();
+  });
+
+  await test.step('the crew works by the sheet on a phone', async () => {
+    await signIn(crewPhone, shop, 'crew');
+    await crew.goto(`${base}/visits`);
+    await crew.getByRole('link', { name: /sheet/i }).first().click();
+    await expect(crew).toHaveURL(/\/sheets\//);
+    expect(await crew.content()).not.toMatch(/2,772|831\.67|1,932/);
+    await crew.getByRole('button', { name: 'I have read them and work by them' }).click();
+    await crew.getByLabel('What is locked and tagged').fill('Panel B, breaker 14, locked and tagged');
+    await crew.getByRole('button', { name: 'Dead, proved' }).click();
+    await expect(crew.getByText(/DEAD, PROVED/i).first()).toBeVisible();
+    const steps = crew.getByRole('checkbox');
+    await expect(steps.first()).toBeEnabled();
+    for (let index = 0; index < (await steps.count()); index++) await steps.nth(index).click();
+    const meter = crew.getByLabel('What the meter says').first();
+    await meter.fill('12');
+    await meter.press('Enter');
+    await expect(crew.getByText(/out of band/i).first()).toBeVisible();
+    while ((await crew.getByRole('button', { name: 'Not measured' }).count()) > 0) {
+      const before = await crew.getByRole('button', { name: 'Not measured' }).count();
+      await crew.getByRole('button', { name: 'Not measured' }).first().click();
+      await expect
+        .poll(() => crew.getByRole('button', { name: 'Not measured' }).count())
+        .toBeLessThan(before);
+    }
+    await crew.getByRole('button', { name: 'Sign off' }).click();
+    await expect(crew.getByText(/signed off/i).first()).toBeVisible();
+    await expect(crew.getByText(/all sent/i)).toBeVisible({ timeout: 15_000 });
+  });
+
+  await test.step('the final invoice, mailed and paid, and the job closed', async () => {
+    await page.goto(`${job}/money`);
+    await page.getByRole('button', { name: 'Send the final invoice' }).click();
+    await expect(page.getByText('Final invoice 1002')).toBeVisible();
+    const mail = await mailTo(CUSTOMER_MAIL, /^Invoice 1002/);
+    await customer.goto(linkIn(mail));
+    await customer.getByRole('link', { name: /Final invoice 1002/ }).click();
+    await payByTestCard(customer);
+    await mailTo(CUSTOMER_MAIL, /^Received: .* for invoice 1002/);
+    await page.goto(job);
+    await page.getByRole('button', { name: 'Close this job' }).click();
+    await expect(page.getByText('This job is closed.')).toBeVisible();
   });
 });
