@@ -14,7 +14,10 @@ import type { Finding } from '@/lib/engine/contract';
 import type { CircuitBody } from '@/lib/surveys/schema';
 import { LineField } from '../survey/fields';
 import { CircuitDrawing, CircuitFigures } from './figures';
-import { ArrayForm, BranchForm, type FormProps, TapeForm } from './forms';
+import { ArrayForm } from './array-form';
+import { BranchForm } from './branch-form';
+import type { FormProps } from './part-choice';
+import { TapeForm } from './tape-form';
 
 type Roles = CircuitChoices['roles'];
 

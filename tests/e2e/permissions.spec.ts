@@ -114,4 +114,30 @@ test.describe('the server answers as the table says', () => {
     });
     expect(big.status()).toBe(413);
   });
+
+  test('the engine figures heavy work in a thread of its own, within the web’s limits', async ({
+    request,
+  }) => {
+    const tape = (cuts: number) => ({
+      cuts,
+      cutMetres: 0.05,
+      railOhmsPerMetre: { positive: 0.045, negative: 0.045 },
+      load: { model: 'constant-current', amps: 0.001 },
+      feeds: [{ at: 0, volts: 24, positiveOhms: 0.01, negativeOhms: 0.01 }],
+    });
+    const ask = (cuts: number) =>
+      request.post('/api/v1/engine/tape-analysis', { data: tape(cuts), headers: as('estimator') });
+    const good = await ask(1000);
+    expect(good.status()).toBe(200);
+    expect((await good.json()).result.loadVolts).toHaveLength(1000);
+    const large = await ask(6000);
+    expect(large.status()).toBe(422);
+    expect(await large.json()).toMatchObject({ code: 'too-large', issues: [{ path: 'cuts' }] });
+    const unknown = await request.post('/api/v1/engine/no-such-thing', {
+      data: {},
+      headers: as('estimator'),
+    });
+    expect(unknown.status()).toBe(422);
+    expect(await unknown.json()).toMatchObject({ code: 'unknown-calculation' });
+  });
 });

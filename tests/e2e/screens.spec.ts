@@ -29,6 +29,8 @@ const SCREENS: [string, () => string, string][] = [
   ['bench work', () => `/jobs/${bench}/circuits`, 'Cabin array'],
   ['quote', () => `/jobs/${job}/quote`, 'New lighting'],
   ['money', () => `/jobs/${job}/money`, 'New lighting'],
+  ['install', () => `/jobs/${job}/install`, 'New lighting'],
+  ['visits', () => '/visits', 'Visits'],
   ['customers', () => '/customers', 'Customers'],
   ['new customer', () => '/customers/new', 'New customer'],
   ['people', () => '/people', 'People'],

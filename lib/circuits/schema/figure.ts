@@ -15,6 +15,7 @@ import {
 import { calculations } from '@/lib/engine/registry';
 import { runCalculation, toIssues } from '@/lib/engine/run';
 import { conductorResistance } from '@/lib/sizing/conductor-resistance';
+import { classTwoLimitAmps } from '@/lib/sizing/tables/nec-ampacity';
 import type { ShopSettings } from '@/lib/units/settings';
 import {
   type BranchCircuit,
@@ -142,9 +143,6 @@ const stop = (
   basis,
 });
 
-/** Class 2 DC source: to 20 V 5 A; over 20 to 60 V 100 VA. NEC Chapter 9 Table 11(B). */
-const classTwoAmps = (volts: number) => (volts <= 20 ? 5 : volts <= 60 ? 100 / volts : 0);
-
 /** What the run's own limits say: engine figures against the limits typed beside them. */
 function tapeFindings(run: TapeRun, result: TapeResult): Finding[] {
   const { driver } = run;
@@ -183,13 +181,14 @@ function tapeFindings(run: TapeRun, result: TapeResult): Finding[] {
       ),
     );
   const amps = result.feeds.reduce((sum, feed) => sum + Math.max(0, feed.amps), 0);
-  if (driver.classTwo && !atMost(amps, classTwoAmps(driver.volts)))
+  const limitAmps = classTwoLimitAmps(driver.volts) ?? 0;
+  if (driver.classTwo && !atMost(amps, limitAmps))
     findings.push(
       stop(
         'class-two-exceeded',
         true,
         'This is more current than a Class 2 source may give.',
-        { amps, limitAmps: classTwoAmps(driver.volts), volts: driver.volts },
+        { amps, limitAmps, volts: driver.volts },
         'NEC 2023 Chapter 9 Table 11(B) (read in an extract)',
       ),
     );
