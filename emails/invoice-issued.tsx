@@ -6,7 +6,8 @@ import { footOf, greeting } from './parts';
 
 export function InvoiceIssuedMail({ content, link }: { content: InvoiceContent; link: string }) {
   const { settings } = content;
-  const body = message('mail.invoice.body', {
+  const nothing = content.totalMinor === 0;
+  const body = message(nothing ? 'mail.invoice.nothing' : 'mail.invoice.body', {
     number: content.number,
     total: formatMoney(content.totalMinor, settings),
     due: formatDate(content.dueOn, settings),
@@ -15,7 +16,7 @@ export function InvoiceIssuedMail({ content, link }: { content: InvoiceContent; 
     <MailFrame preview={body} title={content.title} foot={footOf(content.shop)}>
       <MailText>{greeting(content.customer.contactName)}</MailText>
       <MailText>{body}</MailText>
-      <MailButton href={link}>{message('mail.invoice.button')}</MailButton>
+      <MailButton href={link}>{message(nothing ? 'invoice.to-job' : 'mail.invoice.button')}</MailButton>
       <MailText second>{message('mail.quote-sent.private')}</MailText>
     </MailFrame>
   );

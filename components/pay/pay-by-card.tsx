@@ -1,6 +1,6 @@
 'use client';
 /** Asks our server for the card page and goes there. A second press while the first is under way does nothing. */
-import { useState } from 'react';
+import { useEffect, useState } from 'react';
 import { Button } from '@/components/ui/button';
 import { useHydrated } from '@/components/ui/form';
 
@@ -16,6 +16,12 @@ export function PayByCard({
   const hydrated = useHydrated();
   const [pending, setPending] = useState(false);
   const [said, setSaid] = useState('');
+  // Back from the card page, the browser may show this page as it was left: the button must work again.
+  useEffect(() => {
+    const shown = (event: PageTransitionEvent) => event.persisted && setPending(false);
+    window.addEventListener('pageshow', shown);
+    return () => window.removeEventListener('pageshow', shown);
+  }, []);
   const pay = async () => {
     setPending(true);
     setSaid('');

@@ -6,7 +6,7 @@ import { refreshStage } from '@/lib/jobs/commands';
 import { getJob, type JobWithSteps } from '@/lib/jobs/queries';
 import { linkForContact } from '@/lib/links/commands';
 import { message } from '@/lib/messages';
-import { currentShopId, select } from '@/lib/platform/db';
+import { currentShopId, run, select } from '@/lib/platform/db';
 import { nextNumber } from '@/lib/platform/db/counter';
 import { AppError } from '@/lib/platform/http/errors';
 import { enqueue } from '@/lib/platform/queue/outbox';
@@ -15,7 +15,7 @@ import { contentOf } from '@/lib/quotes/queries';
 import { totalsOf } from '@/lib/quotes/schema/totals';
 import { getShop, settingsOf } from '@/lib/shops/queries';
 import { dayIn } from '@/lib/units';
-import { getInvoice, invoicesOfJob } from './queries';
+import { invoicesOfJob, lockInvoice } from './queries';
 import { type InvoiceContent, type IssueFinalInput, type VoidInput } from './schema';
 
 const DEPOSIT_DUE_DAYS = 7;
@@ -48,8 +48,10 @@ async function contentFor(
   part: Part,
 ): Promise<InvoiceContent> {
   const shop = await getShop(currentShopId());
-  const { currency, locale, timeZone, paper } = settingsOf(shop);
   const quote = await contentOf(accepted.documentId);
+  // The currency is the accepted quote's, whatever the shop's settings say by now.
+  const { currency } = quote.settings;
+  const { locale, timeZone, paper } = settingsOf(shop);
   const issuedOn = dayIn(timeZone, new Date());
   const { dueInDays, ...figures } = part;
   return {
@@ -115,7 +117,6 @@ export async function issueDepositInvoice(accepted: Accepted): Promise<void> {
   if (accepted.depositMinor <= 0 || job.depositRule !== 'percent') return;
   const quote = await contentOf(accepted.documentId);
   const email = await quotedTo(accepted.documentId, quote.customer.email);
-  if (!email) return;
   await command(systemActor(currentShopId(), 'acceptance'), async ({ audit }) => {
     const text = message('invoice.row.deposit', {
       pct: quote.terms.depositPct,
@@ -152,6 +153,8 @@ export async function issueFinalInvoice(
   input: IssueFinalInput,
 ): Promise<{ id: string; number: string }> {
   return command(actor, async ({ audit }) => {
+    // Two presses in two tabs: the second waits here, and then finds the first one's invoice.
+    await run('select id from jobs where id = $1 for update', [input.jobId]);
     const job = await getJob(input.jobId);
     const invoices = (await invoicesOfJob(job.id)).filter((invoice) => !invoice.voided);
     if (invoices.some((invoice) => invoice.purpose === 'final'))
@@ -164,8 +167,9 @@ export async function issueFinalInvoice(
       amountMinor: -Number(invoice.amountMinor),
     }));
     const totalMinor = totals.totalMinor + earlier.reduce((sum, row) => sum + row.amountMinor, 0);
-    if (totalMinor <= 0)
-      throw new AppError('conflict', 'Everything of the accepted total has been invoiced already.');
+    // A deposit of the whole leaves nothing to pay; the final invoice that says so still closes the account.
+    if (totalMinor < 0)
+      throw new AppError('conflict', 'More than the accepted total has been invoiced already.');
     const work = {
       text: message('invoice.row.work', { number: quote.number, revision: quote.revision }),
       amountMinor: totals.netMinor,
@@ -191,10 +195,17 @@ export async function issueFinalInvoice(
 /** A void keeps its number: the sequence has no gap, and the row says what happened. */
 export async function voidInvoice(actor: AnyActor, input: VoidInput): Promise<{ id: string }> {
   return command(actor, async ({ audit }) => {
-    const invoice = await getInvoice(input.invoiceId);
+    const invoice = await lockInvoice(input.invoiceId);
     if (invoice.voided) throw new AppError('conflict', 'This invoice is void already.');
     if (BigInt(invoice.receivedMinor) !== 0n)
       throw new AppError('conflict', 'Something was paid on this invoice: it can not be voided.');
+    const onItsWay = await select(
+      `select 1 from payment_sessions where invoice_id = $1 and state = 'pending'`,
+      [invoice.id],
+    );
+    if (onItsWay.length > 0)
+      throw new AppError('conflict', 'A payment for this invoice is on its way: it can not be voided.');
+    await enqueue('payment.close-pages', { invoiceId: invoice.id });
     await recordDocumentEvent(invoice.id, 'voided', { reason: input.reason }, actor.membershipId);
     await audit(
       'invoice.voided',

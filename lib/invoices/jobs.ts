@@ -14,7 +14,7 @@ import { notFound } from '@/lib/platform/http/errors';
 import { sendMail } from '@/lib/platform/mail';
 import type { Handler } from '@/lib/platform/queue/worker';
 import { getFile } from '@/lib/platform/storage';
-import { invoiceContent } from './queries';
+import { getInvoice, invoiceContent } from './queries';
 import type { InvoiceContent } from './schema';
 
 async function makePdf(shopId: string, documentId: string, content: InvoiceContent): Promise<void> {
@@ -43,10 +43,13 @@ const issued: Handler = async (item) => {
   const { documentId = '', linkId = '' } = item.payload;
   const content = await withShop(item.shopId, () => invoiceContent(documentId));
   if (!(await hasPdf(item.shopId, documentId))) await makePdf(item.shopId, documentId, content);
-  const { pdf, link } = await withShop(item.shopId, async () => ({
+  const { pdf, link, voided } = await withShop(item.shopId, async () => ({
     pdf: await pdfOf(documentId),
     link: await findLink(linkId),
+    voided: (await getInvoice(documentId)).voided,
   }));
+  // Voided before its mail went out: nobody is asked to pay it.
+  if (voided) return;
   if (!link) throw notFound('The link of this mail');
   const body = createElement(InvoiceIssuedMail, { content, link: linkUrl(link) });
   await sendMail({

@@ -1,7 +1,8 @@
 /** Invoices with what was received for them. All must run inside `withShop`, but for those that say so. */
-import { canonicalOf } from '@/lib/documents/queries';
+import { canonicalOf, eventsOf } from '@/lib/documents/queries';
 import { getJob } from '@/lib/jobs/queries';
-import { select, withShop } from '@/lib/platform/db';
+import { type LinkRow, linksOfJob } from '@/lib/links/queries';
+import { run, select, withShop } from '@/lib/platform/db';
 import { notFound } from '@/lib/platform/http/errors';
 import { getShop, settingsOf } from '@/lib/shops/queries';
 import { dayIn } from '@/lib/units';
@@ -24,6 +25,22 @@ export async function getInvoice(id: string): Promise<InvoiceRow> {
   const rows = await select<InvoiceRow>(`${INVOICES} and d.id = $1`, [id]);
   if (!rows[0]) throw notFound('This invoice');
   return rows[0];
+}
+
+/**
+ * The invoice under its job's lock, for whatever asks what is open and then acts on it: paying, voiding, recording.
+ * @throws {AppError} `not-found`
+ */
+export async function lockInvoice(id: string): Promise<InvoiceRow> {
+  await run('select id from jobs where id = (select job_id from documents where id = $1) for update', [id]);
+  return getInvoice(id);
+}
+
+/** The link that the invoice was mailed to, or another live one of its job. */
+export async function linkOfInvoice(invoice: Pick<InvoiceRow, 'id' | 'jobId'>): Promise<LinkRow | null> {
+  const sent = (await eventsOf([invoice.id])).get(invoice.id)?.find((event) => event.kind === 'sent');
+  const live = (await linksOfJob(invoice.jobId)).filter((link) => link.revokedAt === null);
+  return live.find((link) => link.id === sent?.detail['linkId']) ?? live[0] ?? null;
 }
 
 export async function invoiceContent(id: string): Promise<InvoiceContent> {
@@ -58,7 +75,8 @@ export async function moneyOfJob(shopId: string, jobId: string) {
     const settings = settingsOf(await getShop(shopId));
     const invoices = await invoicesOfJob(jobId);
     const payments = await paymentsOfJob(jobId);
-    return { job, settings, invoices, payments, today: dayIn(settings.timeZone, new Date()) };
+    const events = await eventsOf(invoices.map((invoice) => invoice.id));
+    return { job, settings, invoices, payments, events, today: dayIn(settings.timeZone, new Date()) };
   });
 }
 
@@ -97,10 +115,7 @@ export async function customerInvoices(shopId: string, jobId: string) {
 export async function returnView(shopId: string, invoiceId: string) {
   return withShop(shopId, async () => {
     const invoice = await getInvoice(invoiceId);
-    const links = await select<{ id: string }>(
-      'select id from customer_links where job_id = $1 and revoked_at is null order by created_at limit 1',
-      [invoice.jobId],
-    );
-    return { number: invoice.number, shopName: (await getShop(shopId)).name, linkId: links[0]?.id ?? null };
+    const link = await linkOfInvoice(invoice);
+    return { number: invoice.number, shopName: (await getShop(shopId)).name, linkId: link?.id ?? null };
   });
 }

@@ -4,7 +4,7 @@
  */
 import { command, type CommandContext, systemActor } from '@/lib/access/command';
 import type { Actor } from '@/lib/access/policy';
-import { getInvoice } from '@/lib/invoices/queries';
+import { getInvoice, lockInvoice } from '@/lib/invoices/queries';
 import { balanceOf } from '@/lib/invoices/schema';
 import { refreshStage } from '@/lib/jobs/commands';
 import { run, select, withShop } from '@/lib/platform/db';
@@ -19,7 +19,8 @@ import { dayIn, parseMoney } from '@/lib/units';
 import { isId } from '@/lib/access/actor';
 import type { PayState, RecordPaymentInput } from './schema';
 
-const MINUTES_OPEN = 45;
+/** From the row's making: a page that is gone to again (at most 20 minutes old) stays open long enough to type a card. */
+const MINUTES_OPEN = 60;
 
 interface SessionRow {
   id: string;
@@ -29,12 +30,13 @@ interface SessionRow {
   amountMinor: string;
   currency: string;
   state: PayState;
+  createdAt: Date;
   /** Young enough for its card page to be open for a good while yet. */
   fresh: boolean;
 }
 
 const SESSION = `id, invoice_id as "invoiceId", account, checkout_id as "checkoutId", amount_minor::text as "amountMinor", currency, state,
-  created_at > now() - interval '20 minutes' as fresh`;
+  created_at as "createdAt", created_at > now() - interval '20 minutes' as fresh`;
 
 const base = () => env().APP_URL.replace(/\/$/, '');
 
@@ -53,8 +55,7 @@ interface Prepared {
 /** Takes one open session per invoice under its lock, so that a double click on pay makes one. */
 async function prepare(shopId: string, jobId: string, invoiceId: string, email: string): Promise<Prepared> {
   return command(systemActor(shopId, 'customer'), async ({ audit }) => {
-    await run('select id from jobs where id = $1 for update', [jobId]);
-    const invoice = await getInvoice(invoiceId);
+    const invoice = await lockInvoice(invoiceId);
     if (invoice.jobId !== jobId) throw notFound('This invoice');
     const balance = balanceOf(invoice);
     if (balance <= 0n) throw new AppError('conflict', 'Nothing is open on this invoice.');
@@ -124,16 +125,22 @@ export async function startCheckout(
     successUrl: back,
     cancelUrl: back,
     metadata: { shopId, paymentSessionId: session.id, invoiceId },
-    // The service rounds to the second; the same key must carry the same request, so it is cut to the hour's quarter.
-    expiresAt: new Date(Math.ceil(Date.now() / 900_000) * 900_000 + MINUTES_OPEN * 60_000),
+    // The same key must carry the same request, so the time is counted from our row and not from now.
+    expiresAt: new Date(session.createdAt.getTime() + MINUTES_OPEN * 60_000),
     idempotencyKey: session.id,
   });
-  await withShop(shopId, () =>
-    run(
+  const open = await withShop(shopId, async () => {
+    await run(
       'update payment_sessions set checkout_id = $2, url = $3, checked_at = now() where id = $1 returning id',
       [session.id, checkout.id, checkout.url],
-    ),
-  );
+    );
+    return balanceOf(await getInvoice(invoiceId));
+  });
+  // Voided or paid by hand while the page was being made: nobody may pay on it.
+  if (String(open) !== session.amountMinor) {
+    await closePage(shopId, { ...session, checkoutId: checkout.id });
+    throw new AppError('conflict', 'What is open on this invoice has just changed. Reload to see it.');
+  }
   if (!checkout.url) throw new AppError('unavailable', 'The card page could not be opened. Try again.');
   return { url: checkout.url };
 }
@@ -146,20 +153,37 @@ async function reopen(shopId: string, session: SessionRow, checkoutId: string): 
   throw new AppError('conflict', 'This payment page has been used. Reload to see where the invoice stands.');
 }
 
-/** An older page must not be paid too: it is expired, and settled if it had been paid in that moment. */
-async function closeStale(shopId: string, session: SessionRow): Promise<void> {
+/** Ends a card page, and settles it if it had been paid in that moment. */
+async function closePage(shopId: string, session: SessionRow): Promise<PayState> {
   const checkout = await paymentService().expireCheckoutSession(
     session.checkoutId ?? '',
     session.account || null,
   );
-  await settle(shopId, session.id, checkout);
-  if (checkout.state === 'paid' || checkout.state === 'pending')
+  return settle(shopId, session.id, checkout);
+}
+
+/** After an invoice was voided or paid by hand: what still stands open at the card service is ended. */
+export async function closePagesOf(shopId: string, invoiceId: string): Promise<void> {
+  const open = await withShop(shopId, () =>
+    select<SessionRow>(
+      `select ${SESSION} from payment_sessions where invoice_id = $1 and state = 'open' and checkout_id is not null`,
+      [invoiceId],
+    ),
+  );
+  for (const session of open) await closePage(shopId, session);
+}
+
+/** An older page must not be paid too. */
+async function closeStale(shopId: string, session: SessionRow): Promise<void> {
+  const state = await closePage(shopId, session);
+  if (state === 'paid' || state === 'pending')
     throw new AppError('conflict', 'This invoice has just been paid on another page. Reload to see it.');
 }
 
 function assertSame(session: SessionRow, checkout: Checkout): void {
   const same =
     checkout.metadata['paymentSessionId'] === session.id &&
+    (session.checkoutId === null || session.checkoutId === checkout.id) &&
     String(checkout.amountMinor) === session.amountMinor &&
     checkout.currency === session.currency.trim();
   if (same) return;
@@ -171,6 +195,18 @@ function assertSame(session: SessionRow, checkout: Checkout): void {
     'conflict',
     'The payment does not fit its invoice: amount, currency or reference differ.',
   );
+}
+
+/** A session of somebody else's account may carry our reference; it pays nothing of ours. */
+function assertSameAccount(session: SessionRow, notice: PaymentNotice): void {
+  if (session.account === notice.account) return;
+  log().error({ sessionId: session.id, eventId: notice.eventId }, 'a notice came from another account');
+  throw new AppError('conflict', 'This notice comes from another account than its payment.');
+}
+
+/** Paid stays paid, and nothing opens again: what was fetched before another answer may be written after it. */
+function laterOf(known: PayState, fetched: PayState): PayState {
+  return known === 'paid' || fetched === 'open' ? known : fetched;
 }
 
 async function recordCardPayment(
@@ -209,14 +245,17 @@ export async function settle(
     const session = await findSession(sessionId);
     if (!session) throw notFound('This payment');
     assertSame(session, checkout);
-    if (eventKey) await noteEvent(shopId, eventKey);
-    // What has been paid stays paid: a late notice of an earlier state changes nothing.
-    const state = session.state === 'paid' ? 'paid' : checkout.state;
+    if (eventKey) {
+      assertSameAccount(session, eventKey);
+      await noteEvent(shopId, eventKey);
+    }
+    const state = laterOf(session.state, checkout.state);
     if (state === 'paid') await recordCardPayment(context, session, checkout);
-    await run('update payment_sessions set state = $2, checked_at = now() where id = $1 returning id', [
-      sessionId,
-      state,
-    ]);
+    await run(
+      `update payment_sessions set state = $2, checkout_id = coalesce(checkout_id, $3), checked_at = now()
+       where id = $1 returning id`,
+      [sessionId, state, checkout.id],
+    );
     await context.audit('payment.checked', { type: 'payment-session', id: sessionId }, { after: { state } });
     await refreshStage((await getInvoice(session.invoiceId)).jobId);
     return state;
@@ -268,13 +307,14 @@ export async function settleReturn(sessionId: string): Promise<Returned | null> 
   if (!session.checkoutId || session.state === 'paid')
     return { state: session.state, shopId, invoiceId: session.invoiceId };
   const checkout = await paymentService().fetchCheckoutSession(session.checkoutId, session.account || null);
+  if (checkout.state === session.state) return { state: session.state, shopId, invoiceId: session.invoiceId };
   return { state: await settle(shopId, sessionId, checkout), shopId, invoiceId: session.invoiceId };
 }
 
 /** A payment that came by hand. */
 export async function recordPayment(actor: Actor, input: RecordPaymentInput): Promise<{ id: string }> {
   return command(actor, async ({ audit, shopId }) => {
-    const invoice = await getInvoice(input.invoiceId);
+    const invoice = await lockInvoice(input.invoiceId);
     if (invoice.voided)
       throw new AppError('conflict', 'This invoice is void: nothing can be received for it.');
     const settings = settingsOf(await getShop(shopId));
@@ -301,6 +341,7 @@ export async function recordPayment(actor: Actor, input: RecordPaymentInput): Pr
     );
     const id = rows[0]?.id ?? '';
     await enqueue('payment.receipt', { paymentId: id });
+    await enqueue('payment.close-pages', { invoiceId: invoice.id });
     await audit(
       'payment.recorded',
       { type: 'payment', id },

@@ -2,15 +2,16 @@
 import { render } from '@react-email/render';
 import { createElement } from 'react';
 import { ReceiptMail } from '@/emails/receipt';
-import { getInvoice, invoiceContent } from '@/lib/invoices/queries';
+import { getInvoice, invoiceContent, linkOfInvoice } from '@/lib/invoices/queries';
 import { balanceOf } from '@/lib/invoices/schema';
-import { linksOfJob, linkUrl } from '@/lib/links/queries';
+import { linkUrl } from '@/lib/links/queries';
 import { message } from '@/lib/messages';
 import { select, withShop } from '@/lib/platform/db';
 import { notFound } from '@/lib/platform/http/errors';
 import { sendMail } from '@/lib/platform/mail';
 import type { Handler } from '@/lib/platform/queue/worker';
 import { formatMoney } from '@/lib/units';
+import { closePagesOf } from './commands';
 
 interface Paid {
   invoiceId: string;
@@ -28,7 +29,7 @@ async function load(shopId: string, paymentId: string) {
     const paid = rows[0];
     if (!paid) throw notFound('This payment');
     const invoice = await getInvoice(paid.invoiceId);
-    const link = (await linksOfJob(invoice.jobId)).find((one) => one.revokedAt === null) ?? null;
+    const link = await linkOfInvoice(invoice);
     return { paid, invoice, link, content: await invoiceContent(invoice.id) };
   });
 }
@@ -59,4 +60,9 @@ const receipt: Handler = async (item) => {
   });
 };
 
-export const paymentHandlers: [string, Handler][] = [['payment.receipt', receipt]];
+const closePages: Handler = (item) => closePagesOf(item.shopId, item.payload['invoiceId'] ?? '');
+
+export const paymentHandlers: [string, Handler][] = [
+  ['payment.receipt', receipt],
+  ['payment.close-pages', closePages],
+];

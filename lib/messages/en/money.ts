@@ -19,6 +19,8 @@ export const money = {
   'mail.invoice.subject': 'Invoice {number} from {shop}: {title}',
   'mail.invoice.body':
     'Here is invoice {number} over {total}, due {due}. It is attached, and can be paid online.',
+  'mail.invoice.nothing':
+    'Here is the final invoice {number}. All of it has been invoiced before: nothing more is to be paid for it.',
   'mail.invoice.button': 'See and pay the invoice',
   'mail.receipt.subject': 'Received: {amount} for invoice {number} of {shop}',
   'mail.receipt.body': '{shop} received {amount} on {date} for invoice {number}, {title}. Thank you.',
