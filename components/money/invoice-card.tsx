@@ -2,6 +2,8 @@ import { KeyFigure, Sheet } from '@/components/ui/sheet';
 import { balanceOf, type InvoiceRow, invoiceState } from '@/lib/invoices/schema';
 import { formatDate, formatMoney } from '@/lib/units';
 import type { ShopSettings } from '@/lib/units/settings';
+import type { EventRow } from '@/lib/documents/schema';
+import { InvoiceEvents } from './invoice-events';
 import { RecordPayment } from './record-payment';
 import { VoidInvoice } from './void-invoice';
 
@@ -25,6 +27,7 @@ export function InvoiceCard({
   shopId,
   invoice,
   payments,
+  events,
   settings,
   today,
   may,
@@ -32,6 +35,7 @@ export function InvoiceCard({
   shopId: string;
   invoice: InvoiceRow;
   payments: Payment[];
+  events: EventRow[];
   settings: ShopSettings;
   today: string;
   may: { record: boolean; void: boolean };
@@ -77,6 +81,7 @@ export function InvoiceCard({
           tone={state === 'overdue' ? 'danger' : undefined}
         />
       </dl>
+      <InvoiceEvents events={events} settings={settings} />
       {balance > 0n ? (
         <div className="mt-4 flex flex-col gap-3">
           {may.record ? (

@@ -10,6 +10,7 @@ import { EmptyState, Sheet } from '@/components/ui/sheet';
 import { isId, pageActor } from '@/lib/access/actor';
 import { may } from '@/lib/access/policy';
 import { moneyOfJob } from '@/lib/invoices/queries';
+import { toAppError } from '@/lib/platform/http/errors';
 
 export const metadata: Metadata = { title: 'Money' };
 
@@ -17,7 +18,11 @@ export default async function MoneyPage({ params }: { params: Promise<{ shop: st
   const { shop, job: jobId } = await params;
   const actor = await pageActor(shop, 'price:see');
   if (!isId(jobId)) notFound();
-  const { job, settings, invoices, payments, today } = await moneyOfJob(shop, jobId).catch(() => notFound());
+  const money = await moneyOfJob(shop, jobId).catch((error: unknown) => {
+    if (toAppError(error).code === 'not-found') notFound();
+    throw error;
+  });
+  const { job, settings, invoices, payments, events, today } = money;
   const canIssue = may(actor, 'invoice:edit') && job.facts.accepted && !job.facts.finalInvoiced;
   return (
     <PageBody
@@ -47,6 +52,7 @@ export default async function MoneyPage({ params }: { params: Promise<{ shop: st
             shopId={shop}
             invoice={invoice}
             payments={payments.filter((payment) => payment.invoiceId === invoice.id)}
+            events={events.get(invoice.id) ?? []}
             settings={settings}
             today={today}
             may={{ record: may(actor, 'payment:record'), void: may(actor, 'payment:refund') }}
