@@ -45,7 +45,11 @@ export function PhotoStrip({
     if (!file) return;
     setSaid({ text: 'Sending the photo …', bad: false });
     const query = new URLSearchParams({ subjectType: subject.type, subjectId: subject.id });
-    const response = await fetch(`${base}?${query}`, { method: 'POST', body: file }).catch(() => null);
+    const response = await fetch(`${base}?${query}`, {
+      method: 'POST',
+      body: file,
+      headers: { 'idempotency-key': crypto.randomUUID() },
+    }).catch(() => null);
     if (response?.ok) {
       setSaid({ text: '✓ Photo kept.', bad: false });
       await load();

@@ -105,9 +105,10 @@ async function freeze(
     dueOn: content.dueOn,
     createdBy,
   });
-  const link = await linkForContact(job.id, email);
-  await recordDocumentEvent(id, 'sent', { to: email, linkId: link.id }, createdBy);
-  await enqueue('invoice.issued', { documentId: id, linkId: link.id });
+  // Accepted through the office by a customer without e-mail: the invoice stands all the same, and is handed over.
+  const link = email ? await linkForContact(job.id, email) : null;
+  if (link) await recordDocumentEvent(id, 'sent', { to: email, linkId: link.id }, createdBy);
+  await enqueue('invoice.issued', { documentId: id, linkId: link?.id ?? '' });
   return { id, number };
 }
 

@@ -45,11 +45,11 @@ const issued: Handler = async (item) => {
   if (!(await hasPdf(item.shopId, documentId))) await makePdf(item.shopId, documentId, content);
   const { pdf, link, voided } = await withShop(item.shopId, async () => ({
     pdf: await pdfOf(documentId),
-    link: await findLink(linkId),
+    link: linkId === '' ? null : await findLink(linkId),
     voided: (await getInvoice(documentId)).voided,
   }));
   // Voided before its mail went out: nobody is asked to pay it.
-  if (voided) return;
+  if (voided || linkId === '') return;
   if (!link) throw notFound('The link of this mail');
   const body = createElement(InvoiceIssuedMail, { content, link: linkUrl(link) });
   await sendMail({

@@ -51,7 +51,8 @@ async function payByTestCard(page: Page): Promise<void> {
 
 test('one job from site survey to paid final invoice', async ({ page, browser }) => {
   test.setTimeout(100_000);
-  quiet(page, [/401/]);
+  // A wrong password is answered with 401, a photo that is none with 422.
+  quiet(page, [/401/, /422.*photos/]);
   await signInByScreen(page, shop.email('owner'));
   const base = `/s/${shop.shopId}`;
 
@@ -95,6 +96,18 @@ test('one job from site survey to paid final invoice', async ({ page, browser })
     await page.getByRole('button', { name: 'Add a cove' }).click();
     await page.getByLabel('Tape length', { exact: true }).fill('15 ft 9 in');
     await page.getByLabel('To the driver', { exact: true }).fill('8');
+    await page.getByRole('button', { name: 'Add a change' }).click();
+    await page.getByLabel('New', { exact: true }).selectOption({ label: 'Flat panel 2 x 2 ft, 24 W' });
+    await page.getByLabel('New count', { exact: true }).fill('2');
+    await expect(page.getByRole('group', { name: /^Checked:/ })).toBeVisible();
+    // A photo by its content, not by its name: what is none is refused in words, and a real one is kept.
+    await page
+      .getByLabel('Add a photo')
+      .setInputFiles({ name: 'cove.jpg', mimeType: 'image/jpeg', buffer: Buffer.from('not a picture') });
+    await expect(page.getByText('Not kept')).toBeVisible();
+    await page.getByLabel('Add a photo').setInputFiles('tests/e2e/pictures/customer.png');
+    await expect(page.getByText('✓ Photo kept.')).toBeVisible();
+    await expect(page.getByRole('img', { name: 'Photo 1 of Counter' })).toBeVisible();
     await saved(page);
     await page.reload();
     await expect(page.getByRole('heading', { name: 'Back room' })).toBeVisible();
@@ -155,6 +168,9 @@ test('one job from site survey to paid final invoice', async ({ page, browser })
     await page.getByLabel('Parts, each').last().fill('96');
     await page.getByRole('button', { name: 'Add the line' }).click();
     await expect(page.getByText('Old tubes and ballasts taken away').first()).toBeVisible();
+    await page.getByRole('link', { name: /^Preview/ }).click();
+    await expect(page.getByText('What we will do')).toBeVisible();
+    await page.goBack();
     await page.getByRole('button', { name: 'Send revision 1' }).click();
     await expect(page.getByText('Revision 1 is on its way.')).toBeVisible();
   });
@@ -251,4 +267,31 @@ test('one job from site survey to paid final invoice', async ({ page, browser })
     await page.getByRole('button', { name: 'Close this job' }).click();
     await expect(page.getByText('This job is closed.')).toBeVisible();
   });
+});
+
+test('a forgotten password is set anew by mail', async ({ page }) => {
+  quiet(page);
+  await page.goto('/forgotten');
+  await page.getByLabel('E-mail').fill(shop.email('estimator'));
+  await page.getByRole('button', { name: 'Send me an address' }).click();
+  await expect(page.getByText('Look into your mail.')).toBeVisible();
+  const mail = await mailTo(shop.email('estimator'), /^A new password/);
+  await page.goto(linkIn(mail));
+  await page.getByLabel('New password').fill('a fresh lamp');
+  await page.getByLabel('The same again').fill('another lamp');
+  await page.getByRole('button', { name: 'Set it' }).click();
+  await expect(page.getByText('The two do not match.')).toBeVisible();
+  await page.getByLabel('The same again').fill('a fresh lamp');
+  await page.getByRole('button', { name: 'Set it' }).click();
+  await expect(page.getByText('Your new password is set.')).toBeVisible();
+  await page.goto(linkIn(mail));
+  await page.getByLabel('New password').fill('a third lamp');
+  await page.getByLabel('The same again').fill('a third lamp');
+  await page.getByRole('button', { name: 'Set it' }).click();
+  await expect(page.getByText(/has been used/)).toBeVisible();
+  await page.goto('/sign-in');
+  await page.getByLabel('E-mail').fill(shop.email('estimator'));
+  await page.getByLabel('Password').fill('a fresh lamp');
+  await page.getByRole('button', { name: 'Sign in' }).click();
+  await expect(page.getByRole('heading', { level: 1 })).toContainText(/wait|Nothing/);
 });

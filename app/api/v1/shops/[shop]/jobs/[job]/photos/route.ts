@@ -1,5 +1,5 @@
-import { parseWith, readBytes, shopRoute } from '@/lib/access/route';
-import { addPhoto } from '@/lib/photos/commands';
+import { once, parseWith, readBytes, shopRoute } from '@/lib/access/route';
+import { addPhoto, keepPhoto } from '@/lib/photos/commands';
 import { loadPhotos } from '@/lib/photos/queries';
 import { PHOTO_MAX_BYTES, photoQuery } from '@/lib/photos/schema';
 
@@ -16,8 +16,11 @@ export const POST = shopRoute<Params>({
   name: 'photos.add',
   permission: 'work:edit',
   write: true,
-  run: async ({ actor, params, request, json }) => {
+  run: async (call) => {
+    const { actor, params, request, json } = call;
     const query = parseWith(photoQuery, Object.fromEntries(new URL(request.url).searchParams));
-    return json(await addPhoto(actor, params.job, query, await readBytes(request, PHOTO_MAX_BYTES + 1)), 201);
+    const kept = await keepPhoto(actor, params.job, await readBytes(request, PHOTO_MAX_BYTES + 1));
+    const body = { ...query, job: params.job, sha256: kept.sha256 };
+    return json(await once(call, 'photos.add', body, () => addPhoto(actor, params.job, query, kept)), 201);
   },
 });
