@@ -3,6 +3,7 @@ import { expect, type Page, test } from '@playwright/test';
 import { addParts } from '@/seeders/demo';
 import { makeShop, PASSWORD, type TestShop } from '../support/shop';
 import { quiet } from './support/console';
+import { look } from './support/look';
 import { linkIn, mailTo } from './support/mail';
 import { signIn } from './support/signed-in';
 
@@ -50,7 +51,7 @@ async function payByTestCard(page: Page): Promise<void> {
 }
 
 test('one job from site survey to paid final invoice', async ({ page, browser }) => {
-  test.setTimeout(100_000);
+  test.setTimeout(180_000);
   // A wrong password is answered with 401, a photo that is none with 422.
   quiet(page, [/401/, /422.*photos/]);
   await signInByScreen(page, shop.email('owner'));
@@ -112,6 +113,7 @@ test('one job from site survey to paid final invoice', async ({ page, browser })
     await page.reload();
     await expect(page.getByRole('heading', { name: 'Back room' })).toBeVisible();
     await expect(page.getByText('12 luminaires, 1,344 W')).toBeVisible();
+    await look(page, 'survey');
   });
 
   await test.step('a branch circuit, a tape run and bench work', async () => {
@@ -143,6 +145,7 @@ test('one job from site survey to paid final invoice', async ({ page, browser })
     await picture(page, 'circuit-desk');
     await page.getByText('How it was figured').click();
     await saved(page);
+    await look(page, 'circuit-desk');
 
     await start('Counter', 'LED array with resistors (bench work)');
     await page.getByLabel('LED', { exact: true }).selectOption({ label: 'LED warm white, 20 mA' });
@@ -168,11 +171,14 @@ test('one job from site survey to paid final invoice', async ({ page, browser })
     await page.getByLabel('Parts, each').last().fill('96');
     await page.getByRole('button', { name: 'Add the line' }).click();
     await expect(page.getByText('Old tubes and ballasts taken away').first()).toBeVisible();
+    await look(page, 'quote-editor');
     await page.getByRole('link', { name: /^Preview/ }).click();
     await expect(page.getByText('What we will do')).toBeVisible();
+    await look(page, 'quote-preview');
     await page.goBack();
     await page.getByRole('button', { name: 'Send revision 1' }).click();
     await expect(page.getByText('Revision 1 is on its way.')).toBeVisible();
+    await look(page, 'quote-sent');
   });
 
   const phone = await browser.newContext({ viewport: { width: 390, height: 780 } });
@@ -188,12 +194,14 @@ test('one job from site survey to paid final invoice', async ({ page, browser })
       'New lighting for the counter and back room',
     );
     await picture(customer, 'customer');
+    await look(customer, 'customer-quote');
     await customer.getByRole('button', { name: SIGN }).click();
     await expect(customer.getByText('both your tick and your name are needed')).toBeVisible();
     await customer.getByLabel(AGREE).check();
     await customer.getByLabel(NAME).fill('Ines Varga');
     await customer.getByRole('button', { name: SIGN }).click();
     await expect(customer.getByText(/accepted/i).first()).toBeVisible();
+    await look(customer, 'customer-accepted');
     await mailTo(CUSTOMER_MAIL, /^Accepted/);
     await mailTo(`office-${shop.email('owner').slice(6)}`, /^Accepted/);
   });
@@ -203,10 +211,14 @@ test('one job from site survey to paid final invoice', async ({ page, browser })
     expect(mail.attachments?.map((one) => one.contentType)).toEqual(['application/pdf']);
     await customer.goto(linkIn(mail));
     await customer.getByRole('link', { name: /Deposit invoice 1001/ }).click();
+    await expect(customer.getByRole('button', { name: /^Pay by card/ })).toBeVisible();
+    await look(customer, 'customer-invoice');
     await payByTestCard(customer);
+    await look(customer, 'customer-paid');
     await mailTo(CUSTOMER_MAIL, /^Received: .* for invoice 1001/);
     await page.goto(`${job}/money`);
     await expect(page.getByText('✓ paid')).toBeVisible();
+    await look(page, 'money');
   });
 
   const crewPhone = await browser.newContext({
@@ -226,11 +238,14 @@ test('one job from site survey to paid final invoice', async ({ page, browser })
     await expect(page.getByText(/Mar 4, 2030/).first()).toBeVisible();
     await page.getByRole('button', { name: 'Release the wiring sheet' }).click();
     await expect(page.getByText(/copy 1|Copy 1|revision 1|Revision 1/).first()).toBeVisible();
+    await look(page, 'install');
   });
 
   await test.step('the crew works by the sheet on a phone', async () => {
     await signIn(crewPhone, shop, 'crew');
     await crew.goto(`${base}/visits`);
+    await expect(crew.getByRole('link', { name: /sheet/i }).first()).toBeVisible();
+    await look(crew, 'visits');
     await crew.getByRole('link', { name: /sheet/i }).first().click();
     await expect(crew).toHaveURL(/\/sheets\//);
     expect(await crew.content()).not.toMatch(/2,772|831\.67|1,932/);
@@ -248,16 +263,19 @@ test('one job from site survey to paid final invoice', async ({ page, browser })
     await meter.fill('12');
     await meter.press('Enter');
     await expect(crew.getByText(/out of band/i).first()).toBeVisible();
+    await look(crew, 'wiring-sheet');
     await picture(crew, 'wiring-sheet');
     await crew.getByRole('button', { name: 'Sign off' }).click();
     await expect(crew.getByText(/signed off/i).first()).toBeVisible();
     await expect(crew.getByText(/all sent/i)).toBeVisible({ timeout: 15_000 });
+    await look(crew, 'wiring-sheet-signed');
   });
 
   await test.step('the final invoice, mailed and paid, and the job closed', async () => {
     await page.goto(`${job}/money`);
     await page.getByRole('button', { name: 'Send the final invoice' }).click();
     await expect(page.getByText('Final invoice 1002')).toBeVisible();
+    await look(page, 'money-final');
     const mail = await mailTo(CUSTOMER_MAIL, /^Invoice 1002/);
     await customer.goto(linkIn(mail));
     await customer.getByRole('link', { name: /Final invoice 1002/ }).click();
@@ -266,6 +284,7 @@ test('one job from site survey to paid final invoice', async ({ page, browser })
     await page.goto(job);
     await page.getByRole('button', { name: 'Close this job' }).click();
     await expect(page.getByText('This job is closed.')).toBeVisible();
+    await look(page, 'job-closed');
   });
 });
 
