@@ -57,7 +57,7 @@ export function InvoiceCard({
         {invoice.hasPdf ? (
           <a
             href={`/api/v1/shops/${shopId}/documents/${invoice.id}/pdf`}
-            className="inline-flex min-h-touch items-center"
+            className="inline-flex min-h-touch items-center underline"
           >
             PDF
           </a>

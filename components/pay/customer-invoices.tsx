@@ -23,12 +23,12 @@ export function CustomerInvoices({
 }) {
   if (invoices.length === 0) return null;
   return (
-    <Band>
+    <Band title={message('invoice.heading')}>
       {invoices.map((invoice) => (
         <PriceRow key={invoice.id} amount={formatMoney(invoice.amountMinor, settings)}>
           <a
             href={`${base}/invoices/${invoice.id}`}
-            className="inline-flex min-h-touch items-center font-bold"
+            className="inline-flex min-h-touch items-center font-bold underline"
           >
             {message(invoice.purpose === 'deposit' ? 'invoice.deposit' : 'invoice.final', {
               number: invoice.number,

@@ -33,14 +33,15 @@ function Row({
   const { factor, unit, decimals } = scaleOf(reading);
   const show = (value: number) => formatNumber(value * factor, decimals);
   const verdict = verdictOf(reading, measured);
+  const expected = `${show(reading.low)} to ${show(reading.high)} ${unit}`;
   return (
     <tr className="border-t border-rule">
       <th scope="row" className="py-2 pr-4 text-left font-normal">
         {readingName(reading, circuit.readings, settings)}
+        {/* A phone has no width for a column of its own. */}
+        <span className="block font-mono text-sm text-ink-2 sm:hidden">{expected}</span>
       </th>
-      <td className="px-2 py-2 text-right font-mono whitespace-nowrap">
-        {show(reading.low)} to {show(reading.high)} {unit}
-      </td>
+      <td className="px-2 py-2 text-right font-mono whitespace-nowrap max-sm:hidden">{expected}</td>
       <td className="px-2 py-2 text-right font-mono font-bold whitespace-nowrap text-measured">
         {measured?.value === undefined || measured.value === null ? '–' : `${show(measured.value)} ${unit}`}
       </td>
@@ -70,7 +71,7 @@ export function ReadingsTable({ sheet, progress, settings }: Props) {
                 <th scope="col" className="pr-4 text-left font-normal">
                   Reading
                 </th>
-                <th scope="col" className="px-2 text-right font-normal">
+                <th scope="col" className="px-2 text-right font-normal max-sm:hidden">
                   Expected
                 </th>
                 <th scope="col" className="px-2 text-right font-normal">

@@ -3,6 +3,7 @@ export const money = {
   'invoice.row.deposit': 'Deposit, {pct} % of quote {number}, revision {revision}',
   'invoice.row.work': 'Work of quote {number}, revision {revision}, before tax',
   'invoice.row.earlier': 'Less invoice {number}',
+  'invoice.heading': 'Invoices',
   'invoice.deposit': 'Deposit invoice {number}',
   'invoice.final': 'Final invoice {number}',
   'invoice.line': 'Of {issued}, due {due}',

@@ -79,11 +79,11 @@ export default async function CustomerInvoicePage({
           />
         )}
         <p className="mt-5 flex flex-wrap gap-x-6">
-          <a href={base} className="inline-flex min-h-touch items-center">
+          <a href={base} className="inline-flex min-h-touch items-center underline">
             {message('invoice.to-job')}
           </a>
           {invoice.hasPdf ? (
-            <a href={`${base}/documents/${id}`} className="inline-flex min-h-touch items-center">
+            <a href={`${base}/documents/${id}`} className="inline-flex min-h-touch items-center underline">
               PDF
             </a>
           ) : null}

@@ -48,7 +48,7 @@ export default async function JobPage({ params }: { params: Promise<{ shop: stri
   return (
     <PageBody
       title={job.title}
-      sub={`Job ${job.number}, ${job.customerName}, ${job.siteName}${job.siteAddress ? `, ${job.siteAddress}` : ''}`}
+      sub={`Job ${job.number}, ${[...new Set([job.customerName, job.siteName, job.siteAddress].filter(Boolean))].join(', ')}`}
     >
       <Sheet>
         <JobLine steps={steps} size="large" />
