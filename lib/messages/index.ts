@@ -7,6 +7,7 @@ import { catalogueOf, type MessageValues } from './catalogue';
 import { crew } from './en/crew';
 import { findings } from './en/findings';
 import { circuitFindings } from './en/findings-circuits';
+import { constantCurrentFindings } from './en/findings-constant-current';
 import { retrofitFindings } from './en/findings-retrofit';
 import { jobs } from './en/jobs';
 import { labels } from './en/labels';
@@ -29,6 +30,7 @@ const catalogue = catalogueOf({
   ...people,
   ...money,
   ...circuitFindings,
+  ...constantCurrentFindings,
   ...retrofitFindings,
   ...labels,
   ...words,

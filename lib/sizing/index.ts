@@ -5,6 +5,7 @@ import { arraySpreadCalculation } from './array-spread';
 import { branchCircuitCalculation } from './branch-circuit';
 import { conductorResistanceCalculation } from './conductor-resistance';
 import { conductorSizeCalculation } from './conductor-size';
+import { linearCurrentSourceCalculation } from './linear-current-source';
 import { resistorArrayCalculation } from './resistor-array';
 import { retrofitCheckCalculation } from './retrofit-check';
 import { tapeAnalysisCalculation } from './tape-analysis';
@@ -17,6 +18,7 @@ export const sizingCalculations = [
   resistorArrayCalculation,
   arrayAnalysisCalculation,
   arraySpreadCalculation,
+  linearCurrentSourceCalculation,
   tapeAnalysisCalculation,
   branchCircuitCalculation,
   retrofitCheckCalculation,

@@ -11,6 +11,7 @@ import {
   refuse,
 } from '@/lib/engine/contract';
 import { celsius, fraction, positive } from './inputs';
+import { checkForwardVolts, forwardVoltsShape } from './led-range';
 import { findingsOf } from './resistor-array-findings';
 import {
   type ArrayString,
@@ -34,9 +35,7 @@ const leds = z.number().check(z.int('must be a whole number'), z.minimum(1, 'mus
 const schema = z.strictObject({
   supply: supplyWindow,
   led: z.strictObject({
-    forwardVolts: positive,
-    forwardVoltsMin: positive,
-    forwardVoltsMax: positive,
+    ...forwardVoltsShape,
     amps: positive,
     maxAmps: positive,
   }),
@@ -68,12 +67,7 @@ function derateAt(input: ResistorArrayInput): number {
 
 function caseOf(input: ResistorArrayInput, limits: Limits): Case {
   const { led, resistor } = input;
-  if (led.forwardVoltsMin > led.forwardVoltsMax) {
-    refuse('led.forwardVoltsMin', 'must not be above forwardVoltsMax');
-  }
-  if (!atLeast(led.forwardVolts, led.forwardVoltsMin) || !atMost(led.forwardVolts, led.forwardVoltsMax)) {
-    refuse('led.forwardVolts', 'must lie between forwardVoltsMin and forwardVoltsMax');
-  }
+  checkForwardVolts(led, 'led');
   if (input.perString !== undefined && input.perString > input.count) {
     refuse('perString', 'must not be above count');
   }

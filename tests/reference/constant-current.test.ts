@@ -1,0 +1,149 @@
+/**
+ * Constant-current circuits against published figures (data/constant-current.json names the source of each) and
+ * against ngspice run on the spot.
+ */
+import { describe, expect, it } from 'vitest';
+import { runCalculation } from '@/lib/engine/run';
+import {
+  linearCurrentSourceCalculation,
+  type LinearCurrentSourceInput,
+} from '@/lib/sizing/linear-current-source';
+import { operatingPoint } from '../support/ngspice';
+import { seeded, testSeed } from '../support/random';
+import entries from './data/constant-current.json';
+
+interface Entry {
+  id: string;
+  inputs: Record<string, number>;
+  expected: Record<string, number | boolean>;
+  tolerance: number;
+}
+const entry = (id: string): Entry => {
+  const found = (entries as unknown as Entry[]).find((one) => one.id === id);
+  if (!found) throw new Error(`no entry ${id}`);
+  return found;
+};
+const expectNear = (got: unknown, want: unknown, relative: number) =>
+  expect(Math.abs((got as number) - (want as number)), `${got} against ${want}`).toBeLessThanOrEqual(
+    relative * Math.abs(want as number),
+  );
+
+/** LEDs whose forward volts do not vary, as in the sources. */
+function source(volts: number, forwardVolts: number, perString: number, amps: number, more: object = {}) {
+  const input: LinearCurrentSourceInput = {
+    supply: { volts },
+    led: { forwardVolts, forwardVoltsMin: forwardVolts, forwardVoltsMax: forwardVolts, maxAmps: 2 },
+    perString,
+    amps,
+    dropoutVolts: 2.5,
+    thermalCelsiusPerWatt: 80,
+    maxJunctionCelsius: 125,
+    ambientCelsius: 50,
+    series: 'E24',
+    ...more,
+  };
+  return runCalculation(linearCurrentSourceCalculation, input);
+}
+
+describe('adjustable regulator as current source, published', () => {
+  const sheet = entry('regulator-data').expected as Record<string, number>;
+
+  it('takes the typical reference of the sheet where none is given', () => {
+    const answer = source(12, 3.2, 1, 0.1);
+    expect(answer.working.find(({ key }) => key === 'set-ohms-exact')?.inputs[0]?.value).toBe(sheet.Vref_typ);
+  });
+
+  it.each(['regulator-3.9R', 'regulator-4.7R'])('%s: current and watts of a standard set resistor', (id) => {
+    const { inputs, expected, tolerance } = entry(id);
+    const ohms = inputs.R_ohm ?? NaN;
+    const { result } = source(12, 3.2, 1, 1.25 / ohms);
+    expect(result.setOhms).toBe(ohms);
+    expectNear(result.amps, expected.I_A, tolerance);
+    expectNear(result.setWatts, expected.P_R_W, tolerance);
+  });
+
+  it('the spread of the reference is the spread of the current', () => {
+    const { result } = source(12, 3.2, 1, 0.1, { referenceMaxVolts: sheet.Vref_max });
+    expectNear(
+      (result.ampsMax ?? 0) / (result.amps ?? 1),
+      (sheet.Vref_max ?? 0) / (sheet.Vref_typ ?? 1),
+      1e-12,
+    );
+  });
+
+  it('regulator-need-350mA', () => {
+    const { inputs, expected, tolerance } = entry('regulator-need-350mA');
+    expectNear(source(12, 3.2, 1, inputs.I_A ?? NaN).result.setOhmsExact, expected.R_ohm, tolerance);
+  });
+
+  it('regulator-trap-12V-3led: does not regulate, though published as working', () => {
+    const { inputs, expected, tolerance } = entry('regulator-trap-12V-3led');
+    const { V = NaN, Vf = NaN, n = NaN } = inputs;
+    const headroom = entry('regulator-headroom').expected.headroom_V as number;
+    const answer = source(V, Vf, n, 0.3, { dropoutVolts: headroom });
+    const stop = answer.findings.find(({ code }) => code === 'no-headroom');
+    expect(stop !== undefined).toBe(!expected.in_regulation);
+    expectNear(stop?.values.neededVolts, expected.V_needed, tolerance);
+  });
+
+  it('regulator-thermal: from its own numbers, not from the watts that are printed', () => {
+    const { inputs, expected, tolerance } = entry('regulator-thermal');
+    const { Tj, Ta, theta, Vin = NaN, Vf = NaN } = inputs;
+    const limits = {
+      maxJunctionCelsius: Tj,
+      ambientCelsius: Ta,
+      thermalCelsiusPerWatt: theta,
+      series: 'E96',
+    };
+    const answer = source(Vin, Vf, 1, 0.1, limits);
+    const step = (key: string) => answer.working.find((one) => one.key === key)?.value;
+    expectNear(step('regulator-watts-allowed'), expected.P_max_W, tolerance);
+    expectNear(
+      step('regulator-amps-allowed'),
+      (expected.I_mA_excluding_set_resistor as number) / 1000,
+      tolerance,
+    );
+    // Printed 117 mA counts the set resistor's volts as the chip's: its own watts at 117 mA are below the limit.
+    const printed = source(Vin, Vf, 1, (expected.published_mA as number) / 1000, limits);
+    expect(printed.findings.map(({ code }) => code)).not.toContain('junction-too-hot');
+    const more = source(Vin, Vf, 1, 0.14, limits);
+    expect(more.findings.map(({ code }) => code)).toContain('junction-too-hot');
+  });
+});
+
+describe('linear current source against ngspice', () => {
+  const seed = testSeed();
+  const random = seeded(seed);
+  it.each(Array.from({ length: 12 }, (_, k) => k))(`circuit %i, TEST_SEED=${seed}`, () => {
+    const leds = random.whole(1, 8);
+    const reference = random.between(0.2, 1.3);
+    const wanted = random.decades(0.01, 0.7);
+    const supply = leds * 4.5 + reference + random.between(2, 12);
+    const diodes = Array.from(
+      { length: leds },
+      (_, k) => `D${k} n${k} ${k + 1 === leds ? '0' : `n${k + 1}`} led`,
+    );
+    // The chip: a transconductance that holds the reference between its output and its adjusting pin.
+    const netlist = (ohms: number) => [
+      `V1 in 0 ${supply}`,
+      `Vr ref n0 ${reference}`,
+      'G1 in out ref out 1e7',
+      `R1 out n0 ${ohms}`,
+      ...diodes,
+      `.model led D(IS=1e-18 N=3.2 RS=${random.between(0.1, 1)})`,
+    ];
+    const exact = reference / wanted;
+    const typical = { referenceVolts: reference, series: 'E96' as const };
+    const { setOhms } = source(supply, 3.2, leds, wanted, typical).result;
+    expect(setOhms).toBeGreaterThanOrEqual(exact * (1 - 1e-9));
+    const spice = operatingPoint(netlist(setOhms));
+    const value = (name: string) => spice.get(name) ?? NaN;
+    const amps = -value('v1#branch');
+    // The engine with the forward volts that the circuit has at its current.
+    const { result } = source(supply, value('n0') / leds, leds, wanted, typical);
+    expectNear(result.amps, amps, 1e-5);
+    expectNear(result.regulatorWatts, (value('in') - value('out')) * amps, 1e-5);
+    expectNear(result.setWatts, (value('out') - value('n0')) * amps, 1e-5);
+    expectNear(result.efficiency, value('n0') / value('in'), 1e-5);
+  });
+});
