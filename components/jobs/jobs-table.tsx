@@ -151,7 +151,9 @@ export function JobsTable({
                   >
                     {job.title}
                   </Link>
-                  <span className="block text-ink-2">{job.siteName}</span>
+                  {job.siteName === job.customerName ? null : (
+                    <span className="block text-ink-2">{job.siteName}</span>
+                  )}
                 </td>
                 <td className="block sm:table-cell sm:py-3 sm:pr-4 sm:align-middle">{job.customerName}</td>
                 <td className="block sm:table-cell sm:py-3 sm:pr-4 sm:align-middle">
