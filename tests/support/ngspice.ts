@@ -23,10 +23,11 @@ const TOLERANCES = [
 ] as const;
 const PATIENCE_MILLISECONDS = 3000;
 
+// Full pivoting: with ngspice's own threshold conductors of no resistance cost six digits in loops of milliohms.
+const OPTIONS = '.options reltol=1e-9 gmin=1e-18 pivrel=0.9 itl1=200 itl2=200';
+
 function attempt(file: string, lines: readonly string[], tolerance: string): Map<string, number> {
-  // Full pivoting: with ngspice's own threshold conductors of no resistance cost six digits in loops of milliohms.
-  const options = `.options reltol=1e-9 gmin=1e-18 pivrel=0.9 itl1=200 itl2=200 ${tolerance}`;
-  writeFileSync(file, ['* operating point', options, ...lines, ...CONTROL].join('\n'));
+  writeFileSync(file, ['* operating point', `${OPTIONS} ${tolerance}`, ...lines, ...CONTROL].join('\n'));
   try {
     const output = execFileSync('ngspice', ['-b', file], {
       encoding: 'utf8',
@@ -51,6 +52,29 @@ export function operatingPoint(lines: readonly string[]): Map<string, number> {
       if (values.size > 0 && ![...values.values()].some(Number.isNaN)) return values;
     }
     throw new Error('ngspice finds no operating point for this circuit');
+  } finally {
+    rmSync(folder, { recursive: true });
+  }
+}
+
+/** What ngspice itself says its analysis of the operating point took: no start, no reading, no printing. */
+export function analysisSeconds(lines: readonly string[]): number {
+  const folder = mkdtempSync(join(tmpdir(), 'netlist-'));
+  try {
+    const file = join(folder, 'circuit.cir');
+    const control = ['.control', 'op', 'rusage time', 'quit', '.endc', '.end'];
+    writeFileSync(
+      file,
+      ['* operating point', '.options reltol=1e-9 gmin=1e-18', ...lines, ...control].join('\n'),
+    );
+    const output = execFileSync('ngspice', ['-b', file], {
+      encoding: 'utf8',
+      maxBuffer: 1 << 28,
+      stdio: 'pipe',
+    });
+    const seconds = /Total analysis time \(seconds\) = (\S+)/.exec(output)?.[1];
+    if (seconds === undefined) throw new Error('ngspice does not say how long it took');
+    return Number(seconds);
   } finally {
     rmSync(folder, { recursive: true });
   }
