@@ -16,15 +16,26 @@ const caution = (code: string, message: string, values: Finding['values'], basis
   basis,
 });
 
-function sharedResistor(input: ArrayInput, { imbalance }: ArrayAnalysis): Finding[] {
+/** The string that takes most, from 1, and how many times its even share of the current that is. */
+function greediest({ strings }: ArrayAnalysis): { string: number; overShare: number | null; amps: number } {
+  const amps = strings.map((string) => string.amps);
+  const most = amps.reduce((best, own, i) => (own > (amps[best] ?? 0) ? i : best), 0);
+  const total = amps.reduce((sum, own) => sum + own, 0);
+  const own = amps[most] ?? 0;
+  return { string: most + 1, overShare: total > 0 ? (own * strings.length) / total : null, amps: own };
+}
+
+function sharedResistor(input: ArrayInput, result: ArrayAnalysis): Finding[] {
   const sharedOhms = input.sharedOhms ?? 0;
   if (sharedOhms === 0 || input.strings.length < 2) return [];
+  const { imbalance } = result;
+  const { string, overShare } = greediest(result);
   const ratio = imbalance === null ? 'a string is dark' : `highest over lowest is ${imbalance}`;
   return [
     caution(
       'shared-resistor',
-      `One resistor is shared by ${input.strings.length} strings: nothing makes them share the current (${ratio}).`,
-      { sharedOhms, strings: input.strings.length, imbalance },
+      `One resistor is shared by ${input.strings.length} strings: nothing makes them share the current (${ratio}). The one with the lowest volts takes the most: string ${string}, ${overShare} times an even share. It runs hottest and ages first.`,
+      { sharedOhms, strings: input.strings.length, imbalance, string, overShare },
       'common practice',
     ),
   ];
@@ -76,7 +87,7 @@ export function findingsOf(input: ArrayInput, result: ArrayAnalysis): Finding[] 
 
 export function workingOf(input: ArrayInput, result: ArrayAnalysis): WorkingStep[] {
   const amps = result.strings.map((string) => string.amps);
-  const highest = amps.reduce((most, own) => Math.max(most, own), 0);
+  const { amps: highest, overShare } = greediest(result);
   const lowest = amps.reduce((least, own) => Math.min(least, own), Infinity);
   const at = input.strings[0]?.leds[0]?.celsius ?? 25;
   return [
@@ -113,6 +124,18 @@ export function workingOf(input: ArrayInput, result: ArrayAnalysis): WorkingStep
       value: result.imbalance,
       unit: '',
       basis: 'common practice',
+    },
+    {
+      key: 'string-share',
+      name: 'Highest string current over an even share',
+      formula: 'Imax / (sum of I / strings)',
+      inputs: [
+        { name: 'Imax', value: highest, unit: 'A' },
+        { name: 'strings', value: amps.length, unit: '' },
+      ],
+      value: overShare,
+      unit: '',
+      basis: "Kirchhoff's laws",
     },
   ];
 }

@@ -7,7 +7,9 @@ import { conductorResistanceCalculation } from './conductor-resistance';
 import { conductorSizeCalculation } from './conductor-size';
 import { linearCurrentSourceCalculation } from './linear-current-source';
 import { resistorArrayCalculation } from './resistor-array';
+import { resistorCodeCalculation } from './resistor-code';
 import { retrofitCheckCalculation } from './retrofit-check';
+import { seriesStringCalculation } from './series-string';
 import { tapeAnalysisCalculation } from './tape-analysis';
 import { voltageDropCalculation } from './voltage-drop';
 
@@ -16,9 +18,11 @@ export const sizingCalculations = [
   voltageDropCalculation,
   conductorSizeCalculation,
   resistorArrayCalculation,
+  resistorCodeCalculation,
   arrayAnalysisCalculation,
   arraySpreadCalculation,
   linearCurrentSourceCalculation,
+  seriesStringCalculation,
   tapeAnalysisCalculation,
   branchCircuitCalculation,
   retrofitCheckCalculation,

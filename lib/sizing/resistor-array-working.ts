@@ -1,6 +1,8 @@
 /** How a resistor array was figured, once for the whole strings and once for a shorter last one. */
 import type { WorkingInput, WorkingStep } from '@/lib/engine/contract';
 import { type ArrayString, type Case, distinct, type ResistorArray } from './resistor-array-string';
+import { colourBands } from './resistor-code';
+import { COLOUR_CODE_BASIS } from './tables/colour-code';
 import { E_SERIES_BASIS } from './tables/e-series';
 
 const OHMS_LAW = "Ohm's law";
@@ -46,6 +48,15 @@ function resistance(c: Case, s: ArrayString): WorkingStep[] {
       value: s.ballastOhms,
       unit: 'ohm',
       basis: E_SERIES_BASIS,
+    },
+    {
+      key: 'ballast-bands',
+      name: 'Its colour bands',
+      formula: 'digits, multiplier, tolerance',
+      inputs: [leds, given('R', s.ballastOhms, 'ohm'), given('tr', c.tolerance, '')],
+      value: (s.ballastOhms && colourBands(s.ballastOhms, c.tolerance * 100)?.join(' ')) || null,
+      unit: '',
+      basis: COLOUR_CODE_BASIS,
     },
   ];
 }

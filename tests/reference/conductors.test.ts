@@ -48,6 +48,27 @@ describe('AWG at 20 C, National Bureau of Standards figures', () => {
   );
 });
 
+describe('annealed copper', () => {
+  it('iacs: 0.017241 ohm mm2/m at 20 C and 0.00393 per kelvin', () => {
+    const [iacs] = starting('iacs');
+    const { resistivity_ohm_mm2_per_m, alpha20_per_C } = iacs?.expected as Record<string, number>;
+    // AWG 24 is figured from its diameter and this resistivity.
+    const { ohmsPerMetre, squareMillimetres } = conductorResistance('AWG 24', 'solid', 20);
+    within(ohmsPerMetre * squareMillimetres, resistivity_ohm_mm2_per_m ?? NaN, 1e-9);
+    within(
+      kilometre('1.5 mm2', 'solid', 30) / kilometre('1.5 mm2', 'solid', 20),
+      1 + 10 * (alpha20_per_C ?? NaN),
+      1e-9,
+    );
+  });
+
+  it.each(starting('cu-factor25'))('$id: heated from 25 C', ({ inputs, expected, tolerance }) => {
+    const ratio =
+      kilometre('1.5 mm2', 'solid', inputs['temp_C'] as number) / kilometre('1.5 mm2', 'solid', 25);
+    expect(Math.abs(ratio - (expected['ratio'] as number))).toBeLessThanOrEqual(tolerance);
+  });
+});
+
 describe('ASTM B258', () => {
   it.each(starting('astmB258'))('$id', ({ inputs, expected }) => {
     const diameter = awgDiameterMillimetres(inputs['awg_number'] as number);

@@ -165,6 +165,25 @@ describe('constant current, closed form', () => {
   });
 });
 
+describe('a published trap', () => {
+  it('vd-trap-lumped: a load spread along the tape drops half of what it would at its end', () => {
+    const [entry] = closed('vd-trap-lumped');
+    const { W_per_m = 0, L_m = 0, V = 0, trace_ohm_total = 0 } = entry?.inputs as Record<string, number>;
+    const want = entry?.expected as Record<string, number>;
+    const cuts = 100_000;
+    const { minVolts } = tapeAnalysis({
+      cuts,
+      cutMetres: L_m / cuts,
+      railOhmsPerMetre: { positive: trace_ohm_total / L_m / 2, negative: trace_ohm_total / L_m / 2 },
+      load: { model: 'constant-current', amps: (W_per_m * L_m) / V / cuts },
+      feeds: [{ at: 0, volts: V, positiveOhms: 0, negativeOhms: 0 }],
+    });
+    // The load of the last cut sits half a cut before the end.
+    expectNear(V - minVolts, want.correct_uniform_const_current_V ?? NaN, 1e-9);
+    expect(V - minVolts).toBeLessThan(0.6 * (want.published_drop_V ?? NaN));
+  });
+});
+
 describe('resistive tape, one end, against the line equation V0 / cosh(L * sqrt(r * g))', () => {
   it.each(closed('ladder-res-'))('$id', ({ inputs, expected, tolerance }) => {
     const { V0 = 0, L_m = 0, r_pair_ohm_per_m = 0, g_S_per_m = 0 } = inputs as Record<string, number>;

@@ -5,6 +5,7 @@
 import { describe, expect, it } from 'vitest';
 import { runCalculation } from '@/lib/engine/run';
 import { nextPreferred } from '@/lib/sizing/e-series';
+import { resistorCodeCalculation } from '@/lib/sizing/resistor-code';
 import { type ResistorArrayInput, resistorArrayCalculation } from '@/lib/sizing/resistor-array';
 import { E_SERIES, type ESeries } from '@/lib/sizing/tables/e-series';
 import ledEntries from './data/07-led.json';
@@ -41,12 +42,51 @@ describe('preferred values, IEC 60063', () => {
     expect(listed).toHaveLength(expected.count as number);
   });
 
+  it.each(starting(resistorEntries, 'eseries-ratio'))(
+    '$id: steps of 10^(1/n)',
+    ({ inputs, expected, tolerance }) => {
+      const listed = E_SERIES[inputs.series as ESeries];
+      const ratio = 10 ** (1 / listed.length);
+      expect(Math.abs(ratio - (expected.ratio as number))).toBeLessThanOrEqual(tolerance);
+      // No listed value is further from the geometric one than its step's rounding allows.
+      listed.forEach((value, i) => expect(Math.abs(value / (10 * ratio ** i) - 1)).toBeLessThan(0.07));
+    },
+  );
+
   it('keeps the E24 values that do not follow 10^(i/24)', () => {
     const off = starting(resistorEntries, 'eseries-off')[0]?.expected.values as Record<string, number>;
     for (const [value, formula] of Object.entries(off)) {
       expect(nextPreferred(Number(value), 'E24')).toBe(Number(value));
       expect(E_SERIES.E24).not.toContain(formula);
     }
+  });
+});
+
+describe('colour code, IEC 60062', () => {
+  const code = (input: object) => runCalculation(resistorCodeCalculation, input).result;
+
+  it.each(starting(resistorEntries, 'bands-'))('$id', ({ inputs, expected }) => {
+    const bands = inputs.bands as string[];
+    const read = code({ bands });
+    expect(read.ohms).toBeCloseTo(expected.R_ohm as number, 9);
+    expect(read.tolerancePct).toBe(expected.tolerance_percent);
+    // And back: four bands, or five for 1 %.
+    expect(code({ ohms: read.ohms, tolerancePct: read.tolerancePct }).bands).toEqual(bands);
+  });
+
+  it.each(starting(resistorEntries, 'colour-'))('$id', ({ inputs, expected }) => {
+    const colour = inputs.colour as string;
+    const { digit, multiplier, tolerance_percent, tempco_ppm_K } = expected as Record<string, number | null>;
+    if (digit !== null && digit !== undefined && digit > 0)
+      expect(code({ bands: [colour, 'black', 'black'] }).ohms).toBe(digit * 10);
+    const multiplied = code({ bands: ['brown', 'black', colour] }).ohms;
+    expect(multiplied / (10 * (multiplier ?? NaN))).toBeCloseTo(1, 12);
+    const toleranced = () => code({ bands: ['brown', 'black', 'black', colour] }).tolerancePct;
+    if (tolerance_percent === null) expect(toleranced).toThrow(/bands\.3/);
+    else expect(toleranced()).toBe(tolerance_percent);
+    const kelvin = () => code({ bands: ['brown', 'black', 'black', 'black', 'brown', colour] }).ppmPerKelvin;
+    if (tempco_ppm_K === null) expect(kelvin).toThrow(/bands\.5/);
+    else expect(kelvin()).toBe(tempco_ppm_K);
   });
 });
 

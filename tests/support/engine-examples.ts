@@ -34,6 +34,7 @@ export const EXAMPLES: Readonly<Record<string, Record<string, unknown>>> = {
     resistor: { series: 'E24', tolerancePct: 5, ratedWatts: [0.25, 0.5, 1], loadFraction: 0.6 },
     ambientCelsius: 40,
   },
+  'resistor-code': { bands: ['brown', 'black', 'red', 'gold'] },
   'array-analysis': {
     supply: { volts: 9, sourceOhms: 0.1 },
     sharedOhms: 10,
@@ -66,6 +67,34 @@ export const EXAMPLES: Readonly<Record<string, Record<string, unknown>>> = {
     ambientCelsius: 40,
     series: 'E24',
     switchingEfficiencyPct: 88,
+  },
+  'series-string': {
+    module: {
+      forwardVolts: 12,
+      forwardVoltsMin: 11.4,
+      forwardVoltsMax: 12.6,
+      voltsPerKelvin: -0.01,
+      maxAmps: 0.5,
+    },
+    count: 17,
+    ambientMinCelsius: -10,
+    ambientMaxCelsius: 40,
+    riseCelsius: 25,
+    feeder: { metres: 8, size: 'AWG 18' },
+    drivers: [
+      { sku: 'small', amps: 0.35, minVolts: 18, maxVolts: 42, maxWatts: 15, cost: 14 },
+      {
+        sku: 'twin',
+        amps: 0.35,
+        minVolts: 24,
+        maxVolts: 56,
+        maxWatts: 40,
+        cost: 26,
+        channels: 2,
+        openCircuitVolts: 60,
+      },
+    ],
+    loadFraction: 0.9,
   },
   'tape-analysis': {
     cuts: 20,

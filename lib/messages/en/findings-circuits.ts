@@ -14,7 +14,10 @@ export const circuitFindings = {
     '{segments, plural, one {One segment has} other {# segments have}} less than the {dropoutVolts:V} that the tape needs (lowest {minVolts:V}): the figures do not hold. Feed both ends, use a larger feeder, or shorten the run.',
   'finding.shared-resistor.title': 'One resistor for several strings',
   'finding.shared-resistor.body':
-    '{strings} strings share {sharedOhms:ohm}: nothing makes them share the current, and the strongest takes the most. Give each string its own resistor.',
+    '{strings} strings share {sharedOhms:ohm}: nothing makes them share the current. The one with the lowest volts takes the most: string {string}, {overShare} times an even share. It runs hottest, its volts fall further, and it ages first. Give each string its own resistor.',
+  'finding.not-preferred-value.title': 'No standard value',
+  'finding.not-preferred-value.body':
+    '{ohms:ohm} is no standard value. Read the bands from the other end, or measure it.',
   'finding.saturation-temperature.title': 'LED figures at another temperature',
   'finding.saturation-temperature.body':
     'The saturation current of {leds} LEDs is given up to {kelvin} K away from their temperature. Give the gap volts too, or measure at the working temperature.',

@@ -7,6 +7,11 @@ export const E_SERIES_BASIS = 'IEC 60063:2015, preferred number series for resis
 const E6 = [10, 15, 22, 33, 47, 68];
 const E12 = [10, 12, 15, 18, 22, 27, 33, 39, 47, 56, 68, 82];
 const E24 = [10, 11, 12, 13, 15, 16, 18, 20, 22, 24, 27, 30, 33, 36, 39, 43, 47, 51, 56, 62, 68, 75, 82, 91];
+const E48 = [
+  100, 105, 110, 115, 121, 127, 133, 140, 147, 154, 162, 169, 178, 187, 196, 205, 215, 226, 237, 249, 261,
+  274, 287, 301, 316, 332, 348, 365, 383, 402, 422, 442, 464, 487, 511, 536, 562, 590, 619, 649, 681, 715,
+  750, 787, 825, 866, 909, 953,
+];
 const E96 = [
   100, 102, 105, 107, 110, 113, 115, 118, 121, 124, 127, 130, 133, 137, 140, 143, 147, 150, 154, 158, 162,
   165, 169, 174, 178, 182, 187, 191, 196, 200, 205, 210, 215, 221, 226, 232, 237, 243, 249, 255, 261, 267,
@@ -15,6 +20,6 @@ const E96 = [
   750, 768, 787, 806, 825, 845, 866, 887, 909, 931, 953, 976,
 ];
 
-export const E_SERIES = { E6, E12, E24, E96 } as const satisfies Record<string, readonly number[]>;
+export const E_SERIES = { E6, E12, E24, E48, E96 } as const satisfies Record<string, readonly number[]>;
 export type ESeries = keyof typeof E_SERIES;
-export const E_SERIES_NAMES = ['E6', 'E12', 'E24', 'E96'] as const satisfies readonly ESeries[];
+export const E_SERIES_NAMES = ['E6', 'E12', 'E24', 'E48', 'E96'] as const satisfies readonly ESeries[];

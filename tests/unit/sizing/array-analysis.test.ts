@@ -29,10 +29,45 @@ describe('findings', () => {
     expect(shared?.severity).toBe('caution');
     expect(shared?.values.imbalance).toBe(answer.result.imbalance);
     expect(answer.result.imbalance).toBeGreaterThan(1.1);
+    // Less saturation current is more forward volts: the first string has the lower.
+    const [first = 0, second = 0] = answer.result.strings.map(({ amps }) => amps);
+    expect(shared?.values).toMatchObject({ string: 1, overShare: first / ((first + second) / 2) });
     expect(
       codes({ supply: { volts: 12, sourceOhms: 0 }, sharedOhms: 30, strings: strings.slice(1) }),
     ).toEqual(['note field-built']);
     expect(codes({ supply: { volts: 12, sourceOhms: 0 }, strings })).toEqual(['note field-built']);
+  });
+
+  it('shows that one resistor for all drives the lowest-voltage string hotter and hotter', () => {
+    // 400 K/W from junction to air, common practice for a small through-hole LED.
+    const KELVIN_PER_WATT = 400;
+    const parts = [1e-18, 1e-18, 1e-18, 3e-18].map((saturationAmps) => ({ ...led, saturationAmps }));
+    const settle = (sharedOhms: number, ballastOhms: number) => {
+      let celsius = parts.map(() => 25);
+      const shares: number[] = [];
+      for (let round = 0; round < 8; round++) {
+        const { result, working } = solve({
+          supply: { volts: 9, sourceOhms: 0 },
+          sharedOhms,
+          strings: parts.map((part, i) => ({
+            ballastOhms,
+            leds: [{ ...part, celsius: celsius[i] ?? 25, saturationCelsius: 25, gapVolts: 3.75 }],
+          })),
+        });
+        celsius = result.strings.map(
+          ({ amps, ledVolts }) => 25 + KELVIN_PER_WATT * amps * (ledVolts[0] ?? 0),
+        );
+        shares.push(Number(working.find(({ key }) => key === 'string-share')?.value));
+      }
+      return { shares, celsius };
+    };
+    const shared = settle(70, 0);
+    for (let round = 1; round < 4; round++)
+      expect(shared.shares[round]).toBeGreaterThan(shared.shares[round - 1] ?? Infinity);
+    expect(Math.max(...shared.celsius)).toBe(shared.celsius[3]);
+    const own = settle(0, 280);
+    expect(own.shares.at(-1)).toBeLessThan(1.05);
+    expect(shared.shares.at(-1)).toBeGreaterThan(1.2);
   });
 
   it('has no imbalance when a string is dark', () => {
