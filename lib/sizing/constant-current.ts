@@ -27,6 +27,15 @@ export function noHeadroom(perString: number, headroomVolts: number, minVolts: n
   );
 }
 
+/** Whether the LEDs take the current can't be said. */
+export const maxAmpsNotGiven = (ampsMax: number): Finding =>
+  caution(
+    'led-max-amps-not-given',
+    `Whether the LED takes ${ampsMax} A is not checked: its highest current is not given.`,
+    { ampsMax },
+    DATASHEET,
+  );
+
 /** @param saferOhms next standard value that keeps the worst current at maxAmps */
 export function ledFindings(
   led: SourceLed,
@@ -35,15 +44,7 @@ export function ledFindings(
   saferOhms: (maxAmps: number) => number,
 ): Finding[] {
   const findings: Finding[] = [];
-  if (led.maxAmps === undefined)
-    findings.push(
-      caution(
-        'led-max-amps-not-given',
-        `Whether the LED takes ${ampsMax ?? ampsWanted} A is not checked: its highest current is not given.`,
-        { ampsMax: ampsMax ?? ampsWanted },
-        DATASHEET,
-      ),
-    );
+  if (led.maxAmps === undefined) findings.push(maxAmpsNotGiven(ampsMax ?? ampsWanted));
   else if (ampsMax !== null && !atMost(ampsMax, led.maxAmps)) {
     const safer = saferOhms(led.maxAmps);
     findings.push(

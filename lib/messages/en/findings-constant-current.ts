@@ -33,4 +33,46 @@ export const constantCurrentFindings = {
   'finding.resistor-would-do.title': 'A resistor would do',
   'finding.resistor-would-do.body':
     'A resistor of {ohms:ohm} loses the same, and over this supply keeps the current between {ampsMin:A} and {ampsMax:A}.',
+  'finding.string-over-insulation.title': 'More volts than the insulation',
+  'finding.string-over-insulation.body':
+    'An open string of {sku} carries {openVolts:V}; modules and connectors are insulated for {insulationVolts:V}. Offer a driver of lower volts.',
+  'finding.driver-over-module-amps.title': 'Driver gives too much current',
+  'finding.driver-over-module-amps.body':
+    '{sku} gives {amps:A}; the module takes {maxAmps:A}. Offer a driver of less current, or set it lower.',
+  'finding.string-window-too-narrow.title': 'No string fits the driver’s window',
+  'finding.string-window-too-narrow.body':
+    '{sku} needs {fewest} modules in series to stay over {minVolts:V} when hot, and takes at most {most} to stay under {maxVolts:V} at a cold start. Offer a driver with a wider window.',
+  'finding.string-over-watts.title': 'Shortest string is too much for the driver',
+  'finding.string-over-watts.body':
+    'The shortest string of {sku}, {fewest} modules, takes {watts:W}; it may be loaded with {limitWatts:W}, {loadPct:%} of its rating. Offer a larger driver.',
+  'finding.too-few-modules.title': 'Too few modules for the driver',
+  'finding.too-few-modules.body':
+    '{count, plural, one {One module has} other {# modules have}} {hotVolts:V} when hot; {sku} needs {minVolts:V}, or it drops out or flickers: {fewest} modules at least. Offer a driver with a lower window.',
+  'finding.count-does-not-split.title': 'Modules can not be split',
+  'finding.count-does-not-split.body':
+    '{count} modules can not be split over strings that fit these drivers; {countBelow} or {countAbove} can. Change the number, or offer another driver.',
+  'finding.temperature-not-counted.title': 'Temperature not counted',
+  'finding.temperature-not-counted.body':
+    'How the forward volts change from {ambientMinCelsius:C} to {ambientMaxCelsius:C} is not given: hot strings may drop out, cold ones may not start. Give the volts per kelvin from the sheet.',
+  'finding.rise-not-counted.title': 'Warming of the LEDs not counted',
+  'finding.rise-not-counted.body':
+    'The LEDs are taken no hotter than the air, {ambientMaxCelsius:C}. In use they are, and a hot string has fewer volts. Give how far they warm.',
+  'finding.live-string.title': 'Open strings are live',
+  'finding.live-string.body':
+    'An open string carries up to {openVolts:V}, and a connector that is opened or closed under current arcs. Switch off, wait, and measure first.',
+  'finding.string-over-class-two-volts.title': 'More volts than Class 2',
+  'finding.string-over-class-two-volts.body':
+    'The strings can carry {openVolts:V}, over the {limitVolts:V} at which Class 2 ends and bare parts may be touched. Enclose all connections, and use wiring methods for these volts.',
+  'finding.string-over-selv-volts.title': 'More than extra-low voltage',
+  'finding.string-over-selv-volts.body':
+    'The strings can carry {openVolts:V}, over the {limitVolts:V} of extra-low voltage. Insulate, enclose and earth them as mains wiring.',
+  'finding.cold-start-over-watts.title': 'Cold start over the driver’s watts',
+  'finding.cold-start-over-watts.body':
+    'At a cold start the strings of {sku} can take {watts:W}; it is rated {maxWatts:W}. See what its maker says of cold starts, or load it less.',
+  'finding.strings-of-different-amps.title': 'Strings of different brightness',
+  'finding.strings-of-different-amps.body':
+    'Strings run at {lowestAmps:A} and at {highestAmps:A}: modules side by side will not look alike. Offer drivers of one current only.',
+  'finding.spare-channels.title': 'Unused channels',
+  'finding.spare-channels.body':
+    '{spare, plural, one {One driver channel stays} other {# driver channels stay}} unused. Cap its terminals.',
 } as const;
