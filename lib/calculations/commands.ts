@@ -14,6 +14,7 @@ const HEAVY = new Set([
   'array-spread',
   'tape-plan',
   'fault-finder',
+  'series-string',
   'branch-circuit',
 ]);
 const SECONDS = 2;
