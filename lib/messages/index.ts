@@ -6,6 +6,7 @@ import type { ShopSettings } from '@/lib/units/settings';
 import { catalogueOf, type MessageValues } from './catalogue';
 import { crew } from './en/crew';
 import { findings } from './en/findings';
+import { benchAndBusFindings, benchAndBusWorking } from './en/findings-bench-and-bus';
 import { circuitFindings } from './en/findings-circuits';
 import { constantCurrentFindings } from './en/findings-constant-current';
 import { retrofitFindings } from './en/findings-retrofit';
@@ -31,6 +32,8 @@ const catalogue = catalogueOf({
   ...money,
   ...circuitFindings,
   ...constantCurrentFindings,
+  ...benchAndBusFindings,
+  ...benchAndBusWorking,
   ...retrofitFindings,
   ...labels,
   ...words,

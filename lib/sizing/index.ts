@@ -5,6 +5,7 @@ import { arraySpreadCalculation } from './array-spread';
 import { branchCircuitCalculation } from './branch-circuit';
 import { conductorResistanceCalculation } from './conductor-resistance';
 import { conductorSizeCalculation } from './conductor-size';
+import { ledFitCalculation } from './led-fit';
 import { linearCurrentSourceCalculation } from './linear-current-source';
 import { resistorArrayCalculation } from './resistor-array';
 import { resistorCodeCalculation } from './resistor-code';
@@ -25,5 +26,6 @@ export const sizingCalculations = [
   seriesStringCalculation,
   tapeAnalysisCalculation,
   branchCircuitCalculation,
+  ledFitCalculation,
   retrofitCheckCalculation,
 ] as unknown as Calculation[];

@@ -114,6 +114,20 @@ export const EXAMPLES: Readonly<Record<string, Record<string, unknown>>> = {
     spacingMetres: 2,
     maxDropPct: 3,
   },
+  'led-fit': {
+    points: [
+      { volts: 2.62, amps: 0.001, sample: 'a' },
+      { volts: 2.74, amps: 0.004, sample: 'a' },
+      { volts: 2.86, amps: 0.012, sample: 'a' },
+      { volts: 3.02, amps: 0.03, sample: 'a' },
+      { volts: 2.66, amps: 0.001, sample: 'b' },
+      { volts: 2.79, amps: 0.004, sample: 'b' },
+      { volts: 2.92, amps: 0.012, sample: 'b' },
+      { volts: 3.08, amps: 0.03, sample: 'b' },
+    ],
+    celsius: 25,
+    workingAmps: 0.02,
+  },
   'retrofit-check': {
     basis: 'us',
     action: 'bypass',
