@@ -80,11 +80,12 @@ export const junctionAt = (
   watts: number,
 ) => ambientCelsius + thermalCelsiusPerWatt * watts;
 
-/** Watts at which the junction reaches its limit; null where it has no limit to reach (no thermal resistance). */
+/** Watts at which the junction reaches its limit, 0 where the air is hotter; null without thermal resistance to speak of. */
 export function wattsAllowed(cooling: Cooling): number | null {
-  if (cooling.thermalCelsiusPerWatt === 0) return null;
   const spare = cooling.maxJunctionCelsius - cooling.ambientCelsius;
-  return Math.max(0, spare / cooling.thermalCelsiusPerWatt);
+  if (spare < 0) return 0;
+  const watts = spare / cooling.thermalCelsiusPerWatt;
+  return Number.isFinite(watts) ? watts : null;
 }
 
 /** A junction that gets too hot, with the thermal resistance that would do; null where no heat sink helps. */

@@ -6,6 +6,7 @@ import { branchCircuitCalculation } from './branch-circuit';
 import { conductorResistanceCalculation } from './conductor-resistance';
 import { conductorSizeCalculation } from './conductor-size';
 import { ledFitCalculation } from './led-fit';
+import { currentSinkCalculation } from './current-sink';
 import { linearCurrentSourceCalculation } from './linear-current-source';
 import { resistorArrayCalculation } from './resistor-array';
 import { resistorCodeCalculation } from './resistor-code';
@@ -24,6 +25,7 @@ export const sizingCalculations = [
   arraySpreadCalculation,
   linearCurrentSourceCalculation,
   seriesStringCalculation,
+  currentSinkCalculation,
   tapeAnalysisCalculation,
   branchCircuitCalculation,
   ledFitCalculation,

@@ -4,6 +4,7 @@
  */
 import { describe, expect, it } from 'vitest';
 import { runCalculation } from '@/lib/engine/run';
+import { currentSinkCalculation, type CurrentSinkInput } from '@/lib/sizing/current-sink';
 import {
   linearCurrentSourceCalculation,
   type LinearCurrentSourceInput,
@@ -16,6 +17,12 @@ interface Entry {
   id: string;
   inputs: Record<string, number>;
   expected: Record<string, number | boolean>;
+  tolerance: number;
+}
+interface SinkEntry {
+  id: string;
+  inputs: { Vref: number; ratio: number[]; R_ohm: number };
+  expected: { I_mA: number[] };
   tolerance: number;
 }
 const entry = (id: string): Entry => {
@@ -123,12 +130,13 @@ describe('linear current source against ngspice', () => {
       { length: leds },
       (_, k) => `D${k} n${k} ${k + 1 === leds ? '0' : `n${k + 1}`} led`,
     );
-    // The chip: a transconductance that holds the reference between its output and its adjusting pin.
+    // The chip: a transconductance of 1e4 S holds the reference between output and adjusting pin but for I / 1e4,
+    // which is as if the set resistor had 1e-4 ohm more.
     const netlist = (ohms: number) => [
       `V1 in 0 ${supply}`,
       `Vr ref n0 ${reference}`,
-      'G1 in out ref out 1e7',
-      `R1 out n0 ${ohms}`,
+      'G1 in out ref out 1e4',
+      `R1 out n0 ${ohms - 1e-4}`,
       ...diodes,
       `.model led D(IS=1e-18 N=3.2 RS=${random.between(0.1, 1)})`,
     ];
@@ -141,9 +149,109 @@ describe('linear current source against ngspice', () => {
     const amps = -value('v1#branch');
     // The engine with the forward volts that the circuit has at its current.
     const { result } = source(supply, value('n0') / leds, leds, wanted, typical);
-    expectNear(result.amps, amps, 1e-5);
-    expectNear(result.regulatorWatts, (value('in') - value('out')) * amps, 1e-5);
-    expectNear(result.setWatts, (value('out') - value('n0')) * amps, 1e-5);
-    expectNear(result.efficiency, value('n0') / value('in'), 1e-5);
+    expectNear(result.amps, amps, 1e-6);
+    // The 1e-4 ohm stand in the chip here.
+    expectNear(result.regulatorWatts, (value('in') - value('out')) * amps, 1e-4);
+    expectNear(result.setWatts, (value('out') - value('n0')) * amps, 1e-3);
+    expectNear(result.efficiency, value('n0') / value('in'), 1e-6);
+  });
+});
+
+/** A sink whose LEDs do not vary. */
+function sink(volts: number, forwardVolts: number, more: Partial<CurrentSinkInput>) {
+  const input: CurrentSinkInput = {
+    referenceVolts: 1.2,
+    currentRatio: 40,
+    ampsPerChannel: 0.02,
+    channels: 24,
+    strings: 24,
+    supply: { volts },
+    led: { forwardVolts, forwardVoltsMin: forwardVolts, forwardVoltsMax: forwardVolts, maxAmps: 1 },
+    perString: 1,
+    dropoutVolts: 0.5,
+    maxPackageWatts: 100,
+    thermalCelsiusPerWatt: 30,
+    ambientCelsius: 25,
+    series: 'E96',
+    ...more,
+  };
+  return runCalculation(currentSinkCalculation, input);
+}
+
+describe('multi-channel sink, published table of the set resistor', () => {
+  const rows = (entries as unknown as SinkEntry[])
+    .filter(({ id }) => id.startsWith('sink-'))
+    .flatMap(({ id, inputs, expected, tolerance }) =>
+      inputs.ratio.map((ratio, k) => ({
+        id,
+        ...inputs,
+        ratio,
+        amps: (expected.I_mA[k] ?? NaN) / 1000,
+        tolerance,
+      })),
+    );
+  it.each(rows)('$id at a ratio of $ratio', ({ Vref, ratio, R_ohm, amps, tolerance }) => {
+    const wanted = { referenceVolts: Vref, currentRatio: ratio, ampsPerChannel: amps };
+    expectNear(sink(5, 3, wanted).result.setOhmsExact, R_ohm, tolerance);
+    // And the other way: a resistor of the series gives the printed current.
+    const { result } = sink(5, 3, { ...wanted, ampsPerChannel: (Vref * ratio) / R_ohm });
+    if (result.setOhms === R_ohm) expectNear(result.ampsPerChannel, amps, tolerance);
+    else expect(result.setOhms).toBeGreaterThan(R_ohm);
+  });
+
+  it('has rows whose resistor is of the series, and rows whose resistor is not', () => {
+    const made = rows.filter(({ R_ohm }) => [1370, 1600, 2400, 24000].includes(R_ohm));
+    for (const { Vref, ratio, R_ohm } of made) {
+      const series = R_ohm === 1370 ? 'E96' : 'E24';
+      const wanted = {
+        referenceVolts: Vref,
+        currentRatio: ratio,
+        ampsPerChannel: (Vref * ratio) / R_ohm,
+        series,
+      } as const;
+      expect(sink(5, 3, wanted).result.setOhms).toBe(R_ohm);
+    }
+    expect(made.length).toBeGreaterThan(4);
+    expect(made.length).toBeLessThan(rows.length);
+  });
+});
+
+describe('multi-channel sink against ngspice', () => {
+  const seed = testSeed();
+  const random = seeded(seed);
+  it.each(Array.from({ length: 8 }, (_, k) => k))(`circuit %i, TEST_SEED=${seed}`, () => {
+    const [leds, strings] = [random.whole(1, 4), random.whole(1, 12)];
+    const [reference, ratio] = [random.between(0.5, 1.3), random.between(10, 100)];
+    const wanted = random.decades(0.005, 0.1);
+    const supply = leds * 4 + random.between(1, 4);
+    const made = {
+      referenceVolts: reference,
+      currentRatio: ratio,
+      ampsPerChannel: wanted,
+      perString: leds,
+      strings,
+    };
+    const { setOhms } = sink(supply, 3, made).result;
+    // The set resistor's current, mirrored into each channel.
+    const spice = operatingPoint([
+      `V1 in 0 ${supply}`,
+      `Vr ref 0 ${reference}`,
+      `R1 ref 0 ${setOhms}`,
+      `.model led D(IS=1e-18 N=3.2 RS=${random.between(0.5, 5)})`,
+      ...Array.from({ length: strings }, (_, s) => [
+        `F${s} s${s}n${leds} 0 Vr ${-ratio}`,
+        ...Array.from(
+          { length: leds },
+          (__, k) => `D${s}x${k} ${k === 0 ? 'in' : `s${s}n${k}`} s${s}n${k + 1} led`,
+        ),
+      ]).flat(),
+    ]);
+    const value = (name: string) => spice.get(name) ?? NaN;
+    const channelVolts = value(`s0n${leds}`);
+    const supplyAmps = -value('v1#branch');
+    const { result } = sink(supply, (supply - channelVolts) / leds, made);
+    expectNear(result.ampsPerChannel, supplyAmps / strings, 1e-6);
+    expectNear(result.packageWatts, channelVolts * supplyAmps, 1e-6);
+    expectNear(result.headroomVolts + 0.5, channelVolts, 1e-6);
   });
 });

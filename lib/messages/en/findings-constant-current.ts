@@ -75,4 +75,22 @@ export const constantCurrentFindings = {
   'finding.spare-channels.title': 'Unused channels',
   'finding.spare-channels.body':
     '{spare, plural, one {One driver channel stays} other {# driver channels stay}} unused. Cap its terminals.',
+  'finding.channel-over-volts.title': 'Supply too high for the channels',
+  'finding.channel-over-volts.body':
+    'A channel that is off sees up to {supplyVolts:V}; it stands {maxChannelVolts:V}. Use a lower supply with fewer LEDs in series.',
+  'finding.channel-over-amps.title': 'More current than a channel gives',
+  'finding.channel-over-amps.body':
+    'A channel is set to {amps:A}; it gives {maxChannelAmps:A} at most. Set less, or join channels as its sheet says.',
+  'finding.channel-tolerance-not-given.title': 'Spread of the channels not given',
+  'finding.channel-tolerance-not-given.body':
+    'All channels are taken to give just what is set. With their tolerance from the sheet the highest current shows.',
+  'finding.one-string-too-hot.title': 'One string is too much heat',
+  'finding.one-string-too-hot.body':
+    'One string alone leaves {watts:W} in the package, which takes {limitWatts:W}. Put more LEDs in series, use a lower supply, or less current.',
+  'finding.boards-by-heat.title': 'Heat decides the number of boards',
+  'finding.boards-by-heat.body':
+    'Each board has {channels} channels, but heat leaves room for fewer: {stringsPerBoard} on the fullest, {boards, plural, one {one board} other {# boards}} in all. More LEDs in series or a lower supply would save boards.',
+  'finding.junction-not-checked.title': 'Chip temperature not checked',
+  'finding.junction-not-checked.body':
+    'Whether the chip takes {junctionCelsius:C} at its junction is not checked. Give its limit from the sheet.',
 } as const;

@@ -202,7 +202,7 @@ describe('refusals', () => {
     [{ thermalCelsiusPerWatt: -1 }, ['thermalCelsiusPerWatt']],
     [{ switchingEfficiencyPct: 101 }, ['switchingEfficiencyPct']],
     [{ setTolerancePct: 100 }, ['setTolerancePct']],
-    [{ series: 'E48' }, ['series']],
+    [{ series: 'E7' }, ['series']],
     [{ heatSink: 1 }, ['heatSink']],
   ])('%j', (change, paths) => expect(refused(change)).toEqual(paths));
 });
