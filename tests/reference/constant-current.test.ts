@@ -9,6 +9,7 @@ import {
   linearCurrentSourceCalculation,
   type LinearCurrentSourceInput,
 } from '@/lib/sizing/linear-current-source';
+import { seriesStringCalculation, type SeriesStringInput } from '@/lib/sizing/series-string';
 import { operatingPoint } from '../support/ngspice';
 import { seeded, testSeed } from '../support/random';
 import entries from './data/constant-current.json';
@@ -253,5 +254,64 @@ describe('multi-channel sink against ngspice', () => {
     expectNear(result.ampsPerChannel, supplyAmps / strings, 1e-6);
     expectNear(result.packageWatts, channelVolts * supplyAmps, 1e-6);
     expectNear(result.headroomVolts + 0.5, channelVolts, 1e-6);
+  });
+});
+
+/** Modules whose volts do not vary, on a driver that is large enough for any string. */
+function string(
+  volts: number,
+  voltsPerKelvin: number,
+  more: Partial<SeriesStringInput>,
+  window: [number, number],
+) {
+  const [minVolts, maxVolts] = window;
+  return runCalculation(seriesStringCalculation, {
+    module: { forwardVolts: volts, forwardVoltsMin: volts, forwardVoltsMax: volts, voltsPerKelvin },
+    count: 10,
+    ambientMinCelsius: 25,
+    ambientMaxCelsius: 25,
+    drivers: [{ sku: 'driver', amps: 0.3, minVolts, maxVolts, maxWatts: 1e6, cost: 1 }],
+    loadFraction: 1,
+    ...more,
+  });
+}
+
+describe('series strings within a window, published', () => {
+  it.each(['string-window-440W', 'string-window-550W'])('%s', (id) => {
+    const { inputs, expected, tolerance } = entry(id);
+    const {
+      V_cold_25C = NaN,
+      V_hot_25C = NaN,
+      percentPerKelvin = NaN,
+      T_min_C = NaN,
+      T_max_C = NaN,
+    } = inputs;
+    const window: [number, number] = [inputs.V_min ?? NaN, inputs.V_max ?? NaN];
+    // The source has one rating for cold and one for hot, each with its own volts per kelvin.
+    const cold = string(
+      V_cold_25C,
+      (percentPerKelvin / 100) * V_cold_25C,
+      { ambientMinCelsius: T_min_C },
+      window,
+    );
+    const hot = string(
+      V_hot_25C,
+      (percentPerKelvin / 100) * V_hot_25C,
+      { ambientMaxCelsius: T_max_C },
+      window,
+    );
+    const step = (answer: typeof cold, key: string) => answer.working.find((one) => one.key === key)?.value;
+    expectNear(cold.result.moduleColdVolts, expected.V_cold, tolerance);
+    expectNear(hot.result.moduleHotVolts, expected.V_hot, tolerance);
+    expect(step(cold, 'string-most')).toBe(expected.most);
+    if (expected.fewest !== undefined) expect(step(hot, 'string-fewest')).toBe(expected.fewest);
+  });
+
+  it('string-led-125C', () => {
+    const { inputs, expected, tolerance } = entry('string-led-125C');
+    const { V_25C = NaN, voltsPerKelvin = NaN, T_C = NaN, I_A = NaN } = inputs;
+    const { result } = string(V_25C, voltsPerKelvin, { riseCelsius: T_C - 25 }, [0, 100]);
+    expectNear(result.moduleHotVolts, expected.V, tolerance);
+    expectNear(result.moduleHotVolts * I_A, expected.P_W, tolerance);
   });
 });

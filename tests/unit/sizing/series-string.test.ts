@@ -129,6 +129,19 @@ describe('choice', () => {
     expect(same.result.purchase[0]?.sku).toBe('small');
   });
 
+  it('takes fewer drivers of one cost, whatever the last bits of the sum', () => {
+    // 0.7 + 0.1 is a little less than 0.8 in binary.
+    const drivers = [
+      { ...small, sku: 'two', cost: 0.7, minVolts: 20, maxVolts: 27 },
+      { ...small, sku: 'three', cost: 0.1, minVolts: 30 },
+      { ...large, sku: 'five', cost: 0.8, minVolts: 50, maxVolts: 65 },
+    ];
+    expect(0.7 + 0.1).toBeLessThan(0.8);
+    expect(run({ count: 5, drivers }).result.purchase).toEqual([{ sku: 'five', quantity: 1, cost: 0.8 }]);
+    const dearer = drivers.map((driver) => (driver.sku === 'five' ? { ...driver, cost: 0.81 } : driver));
+    expect(run({ count: 5, drivers: dearer }).result.drivers).toHaveLength(2);
+  });
+
   it('holds all channels of a driver to its watts together', () => {
     // Eight modules take 33.6 W: a twin of 36 W may be loaded with 32.4 W.
     const answer = run({ count: 8, drivers: [{ ...twin, maxWatts: 36 }] });
