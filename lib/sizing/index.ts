@@ -6,6 +6,7 @@ import { branchCircuitCalculation } from './branch-circuit';
 import { conductorResistanceCalculation } from './conductor-resistance';
 import { conductorSizeCalculation } from './conductor-size';
 import { currentSinkCalculation } from './current-sink';
+import { dimmingBusCalculation } from './dimming-bus';
 import { ledFitCalculation } from './led-fit';
 import { linearCurrentSourceCalculation } from './linear-current-source';
 import { resistorArrayCalculation } from './resistor-array';
@@ -28,6 +29,7 @@ export const sizingCalculations = [
   currentSinkCalculation,
   tapeAnalysisCalculation,
   branchCircuitCalculation,
+  dimmingBusCalculation,
   ledFitCalculation,
   retrofitCheckCalculation,
 ] as unknown as Calculation[];

@@ -131,6 +131,18 @@ export const EXAMPLES: Readonly<Record<string, Record<string, unknown>>> = {
     spacingMetres: 2,
     maxDropPct: 3,
   },
+  'dimming-bus': {
+    bus: 'dali',
+    basis: 'iec',
+    devices: [
+      { name: 'driver', count: 50, amps: 0.002 },
+      { name: 'sensor', count: 4, amps: 0.005, kind: 'input' },
+    ],
+    control: { ratedAmps: 0.2, maxAmps: 0.25, volts: 12 },
+    legs: [{ metres: 80 }, { metres: 60 }],
+    stranding: 'solid',
+    celsius: 30,
+  },
   'led-fit': {
     points: [
       { volts: 2.62, amps: 0.001, sample: 'a' },
