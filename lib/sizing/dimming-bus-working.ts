@@ -1,7 +1,7 @@
 /** How a dimming bus was figured. */
 import type { WorkingInput, WorkingStep } from '@/lib/engine/contract';
-import type { Dimmed, Found, Wired } from './dimming-bus';
 import { countingMetres, dropAmps } from './dimming-bus-cable';
+import type { Dimmed, Found, Wired } from './dimming-bus-result';
 import { ANALOGUE, ANALOGUE_BASIS, DALI, DALI_BASIS, DALI_CABLE_BASIS } from './tables/dimming';
 
 const OHMS_LAW = "Ohm's law";
