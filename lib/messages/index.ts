@@ -10,6 +10,7 @@ import { benchAndBusFindings, benchAndBusWorking } from './en/findings-bench-and
 import { circuitFindings } from './en/findings-circuits';
 import { constantCurrentFindings } from './en/findings-constant-current';
 import { retrofitFindings } from './en/findings-retrofit';
+import { tapePlanFindings } from './en/findings-tape-plan';
 import { jobs } from './en/jobs';
 import { labels } from './en/labels';
 import { money } from './en/money';
@@ -35,6 +36,7 @@ const catalogue = catalogueOf({
   ...benchAndBusFindings,
   ...benchAndBusWorking,
   ...retrofitFindings,
+  ...tapePlanFindings,
   ...labels,
   ...words,
   ...wiring,

@@ -14,6 +14,7 @@ import { resistorCodeCalculation } from './resistor-code';
 import { retrofitCheckCalculation } from './retrofit-check';
 import { seriesStringCalculation } from './series-string';
 import { tapeAnalysisCalculation } from './tape-analysis';
+import { tapePlanCalculation } from './tape-plan';
 import { voltageDropCalculation } from './voltage-drop';
 
 export const sizingCalculations = [
@@ -28,6 +29,7 @@ export const sizingCalculations = [
   seriesStringCalculation,
   currentSinkCalculation,
   tapeAnalysisCalculation,
+  tapePlanCalculation,
   branchCircuitCalculation,
   dimmingBusCalculation,
   ledFitCalculation,

@@ -120,6 +120,44 @@ export const EXAMPLES: Readonly<Record<string, Record<string, unknown>>> = {
     load: { model: 'constant-current', amps: 0.02, dropoutVolts: 18 },
     feeds: [{ at: 0, volts: 24, positiveOhms: 0.05, negativeOhms: 0.05 }],
   },
+  'tape-plan': {
+    basis: 'us',
+    celsius: 40,
+    tape: {
+      volts: 24,
+      cutMetres: 0.05,
+      railOhmsPerMetre: { positive: 0.03, negative: 0.03 },
+      load: { model: 'constant-current', amps: 0.02, dropoutVolts: 18 },
+      maxRunMetres: 5,
+    },
+    runs: [
+      { id: 'cove', metres: 7.5, places: [{ place: 'closet', startMetres: 4 }] },
+      {
+        id: 'shelf',
+        metres: 2.4,
+        places: [{ place: 'closet', startMetres: 6, endMetres: 5 }],
+        pinned: { sections: 1, feed: 'start', size: 'AWG 16', place: 'closet' },
+      },
+    ],
+    drivers: [
+      { sku: 'D-60', volts: 24, channels: 1, channelWatts: 60, classLimited: true, cost: 38 },
+      {
+        sku: 'D-96x4',
+        volts: 24,
+        channels: 4,
+        channelWatts: 96,
+        totalWatts: 384,
+        classLimited: true,
+        cost: 140,
+      },
+    ],
+    conductors: [
+      { size: 'AWG 18', stranding: 'stranded', costPerMetre: 0.6, amps: 7 },
+      { size: 'AWG 16', stranding: 'stranded', costPerMetre: 0.9 },
+    ],
+    labour: { ratePerHour: 75, hoursPerFeed: 0.25, hoursPerDriver: 0.5, hoursPerMetre: 0.02 },
+    limits: { maxDropPct: 5, minDimmestPct: 85, loadFraction: 0.8 },
+  },
   'branch-circuit': {
     basis: 'us',
     volts: 120,

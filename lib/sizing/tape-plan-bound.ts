@@ -1,0 +1,159 @@
+/**
+ * The bound. Give every section at every site a price that grows with its cuts. Whatever a channel holds is worth at
+ * most its fullest load (a knapsack); a driver whose channels are worth no more than it costs can't be beaten by the
+ * prices. So no plan costs less than: for every run its cheapest option at those prices, and for every driver that
+ * must be or may be used what it costs above the worth of its channels. True for any prices at all; good prices come
+ * from a linear program (tape-plan-prices.ts).
+ */
+import type { Choices, Option } from './tape-plan-choices';
+import { type Kinds, worthByRoom } from './tape-plan-knapsack';
+
+/** Price of a section by site and cuts. */
+export type Prices = readonly Float64Array[];
+
+/** What of the choices a part of the search keeps. */
+export interface Region {
+  /** Least and most drivers of each bin. */
+  least: number[];
+  most: number[];
+  /** Options left of each run, by index. */
+  options: number[][];
+}
+
+export interface Bound {
+  cost: number;
+  prices: Prices;
+  /** Of each run its cheapest option at the prices. */
+  runCosts: number[];
+  /** Most that one channel of each bin is worth, and by the room left in it. */
+  worth: Float64Array[];
+  /** Of each bin: what one driver costs above the worth of its channels. */
+  driverCosts: number[];
+}
+
+/** Kind that a section counts as: the largest that is not larger, or -1. */
+export function kindOf({ cuts }: Kinds, own: number): number {
+  let low = -1;
+  let high = cuts.length - 1;
+  while (low < high) {
+    const middle = Math.ceil((low + high) / 2);
+    if ((cuts[middle] ?? 0) <= own) low = middle;
+    else high = middle - 1;
+  }
+  return low;
+}
+
+/** Cheapest spot of every section at the prices, and what the option costs so. */
+export function pricedOption({ sections }: Option, prices: Prices): { cost: number; chosen: number[] } {
+  let cost = 0;
+  const chosen = sections.map(({ cuts, spots }) => {
+    let [least, at] = [Infinity, 0];
+    spots.forEach(({ site, variant }, i) => {
+      const own = variant.cost + (prices[site]?.[cuts] ?? 0);
+      if (own < least) [least, at] = [own, i];
+    });
+    cost += least;
+    return at;
+  });
+  return { cost, chosen };
+}
+
+/** Prices by cuts out of prices by kind: a section between two kinds is priced as the smaller. */
+export function pricesByCuts(
+  choices: Choices,
+  kinds: readonly Kinds[],
+  ofKind: (site: number, kind: number) => number,
+) {
+  const most = choices.runs.reduce((all, { cuts }) => Math.max(all, cuts), 0);
+  return kinds.map((own, site) => {
+    const prices = new Float64Array(most + 1);
+    let kind = -1;
+    for (let cuts = 0; cuts <= most; cuts++) {
+      while ((own.cuts[kind + 1] ?? Infinity) <= cuts) kind++;
+      prices[cuts] = kind < 0 ? 0 : ofKind(site, kind);
+    }
+    return prices;
+  });
+}
+
+/** What drivers of a bin cost at least above their channels' worth: those that must be, or all that may. */
+export function grantedCost(
+  { driverCosts }: Pick<Bound, 'driverCosts'>,
+  { least, most }: Region,
+  b: number,
+): number {
+  const own = driverCosts[b] ?? 0;
+  const number = own > 0 ? (least[b] ?? 0) : (most[b] ?? 0);
+  return number === Infinity ? 0 : number * own;
+}
+
+/**
+ * The bound at these prices within a region. Prices are first lowered until no driver without a most number is worth
+ * more than it costs.
+ */
+export function boundOf(choices: Choices, kinds: readonly Kinds[], region: Region, prices: Prices): Bound {
+  const price = (site: number) => (kind: number) => prices[site]?.[kinds[site]?.cuts[kind] ?? 0] ?? 0;
+  const worth = choices.bins.map((bin) =>
+    worthByRoom(bin.cuts, kinds[bin.site] ?? { cuts: [], supply: [] }, price(bin.site)),
+  );
+  let share = 1;
+  choices.bins.forEach((bin, b) => {
+    const channels = bin.channels * (worth[b]?.[bin.cuts] ?? 0);
+    if (region.most[b] === Infinity && channels * share > bin.cost) share = bin.cost / channels;
+  });
+  const scaled = share < 1 ? prices.map((own) => own.map((one) => one * share)) : prices;
+  if (share < 1) for (const own of worth) own.forEach((one, room) => (own[room] = one * share));
+  const runCosts = choices.runs.map(({ options }, r) =>
+    (region.options[r] ?? []).reduce((least, o) => {
+      const option = options[o];
+      return option ? Math.min(least, pricedOption(option, scaled).cost) : least;
+    }, Infinity),
+  );
+  const driverCosts = choices.bins.map((bin, b) => bin.cost - bin.channels * (worth[b]?.[bin.cuts] ?? 0));
+  const found = { cost: 0, prices: scaled, runCosts, worth, driverCosts };
+  const drivers = choices.bins.reduce((sum, _, b) => sum + grantedCost(found, region, b), 0);
+  return { ...found, cost: runCosts.reduce((sum, own) => sum + own, drivers) };
+}
+
+/** Kinds of the sections that `wanted` keeps; supply counts all sections, each as its kind. */
+export function kindsOf(
+  runs: Choices['runs'],
+  sites: number,
+  wanted: (run: number, option: number) => boolean,
+): Kinds[] {
+  const sets = Array.from({ length: sites }, () => new Set<number>());
+  runs.forEach(({ options }, r) =>
+    options.forEach(({ sections }, o) => {
+      if (!wanted(r, o)) return;
+      for (const { cuts, spots } of sections) for (const { site } of spots) sets[site]?.add(cuts);
+    }),
+  );
+  const kinds = sets.map((set): Kinds => {
+    const cuts = [...set].sort((a, b) => a - b);
+    return { cuts, supply: cuts.map(() => 0) };
+  });
+  for (const { options } of runs) {
+    const most = new Map<Kinds, number[]>();
+    for (const { sections } of options) {
+      const here = new Map<Kinds, number[]>();
+      for (const { cuts, spots } of sections)
+        for (const { site } of spots) {
+          const own = kinds[site] as Kinds;
+          const kind = kindOf(own, cuts);
+          if (kind < 0) continue;
+          const counts = here.get(own) ?? own.cuts.map(() => 0);
+          counts[kind] = (counts[kind] ?? 0) + 1;
+          here.set(own, counts);
+        }
+      for (const [own, counts] of here) {
+        const before = most.get(own) ?? own.cuts.map(() => 0);
+        most.set(
+          own,
+          before.map((count, kind) => Math.max(count, counts[kind] ?? 0)),
+        );
+      }
+    }
+    for (const [own, counts] of most) own.supply = own.supply.map((sum, kind) => sum + (counts[kind] ?? 0));
+  }
+  return kinds;
+}

@@ -1,0 +1,207 @@
+/**
+ * Sections of one site into channels at least cost. Depth first: the largest section left goes into a channel, and
+ * that channel is filled as far as anything fits (moving a section into room that is left never costs more, so fuller
+ * loads suffice). Measured by the bound's prices, every channel wastes what it is worth less than it could be; a
+ * branch ends when it wastes more than the budget, or reaches a state that was reached with less waste.
+ */
+import { type Bound, grantedCost, type Region } from './tape-plan-bound';
+import type { Bin } from './tape-plan-choices';
+
+export interface PackJob {
+  bins: readonly Bin[];
+  /** Bins of the site, by index. */
+  own: readonly number[];
+  region: Region;
+  bound: Bound;
+  /** Cuts of each kind of section (descending), its price, and how many there are. */
+  cuts: readonly number[];
+  prices: readonly number[];
+  counts: readonly number[];
+  /** Loads tried for each channel, and steps in all. */
+  width: number;
+  steps: number;
+}
+
+export interface PackedChannel {
+  bin: number;
+  /** Sections of each kind. */
+  counts: number[];
+}
+
+export interface Packing {
+  /** Of the drivers. */
+  cost: number;
+  channels: PackedChannel[];
+}
+
+interface Fill {
+  counts: number[];
+  waste: number;
+}
+
+/** Rounding of worths. */
+const TINY = 1e-12;
+
+class Packer {
+  best: Packing | null = null;
+  complete = true;
+  private steps = 0;
+  private readonly seen = new Map<string, number>();
+  private readonly left: number[];
+  private readonly free: number[];
+  private readonly drivers: number[];
+  private readonly channels: PackedChannel[] = [];
+
+  constructor(
+    private readonly job: PackJob,
+    private budget: number,
+  ) {
+    this.left = [...job.counts];
+    this.free = job.own.map(() => 0);
+    this.drivers = job.own.map(() => 0);
+  }
+
+  private bin(i: number): Bin {
+    return this.job.bins[this.job.own[i] ?? 0] as Bin;
+  }
+
+  private worth(i: number): Float64Array {
+    return this.job.bound.worth[this.job.own[i] ?? 0] as Float64Array;
+  }
+
+  /** Loads of a channel that hold one section of kind `first` and leave room for nothing that is left. */
+  private fills(i: number, first: number, mostWaste: number): Fill[] {
+    const { cuts, prices, width } = this.job;
+    const worth = this.worth(i);
+    const room = this.bin(i).cuts;
+    const full = worth[room] ?? 0;
+    const counts = cuts.map(() => 0);
+    const found: Fill[] = [];
+    let limit = mostWaste;
+    const keep = (waste: number) => {
+      found.push({ counts: [...counts], waste });
+      if (found.length <= width) return;
+      found.sort((a, b) => a.waste - b.waste).pop();
+      this.complete = false;
+      limit = Math.min(limit, found[width - 1]?.waste ?? limit);
+    };
+    const fill = (kind: number, left: number, value: number, skipped: number): void => {
+      if (++this.steps > this.job.steps) {
+        this.complete = false;
+        if (found.length > 0 || this.spent()) return;
+      }
+      if (full - value - (worth[left] ?? 0) > limit + TINY * full) return;
+      let next = kind;
+      while (next < cuts.length && ((cuts[next] ?? 0) > left || (this.left[next] ?? 0) === 0)) next++;
+      if (next >= cuts.length) {
+        // Something was passed over that would still fit: not full.
+        if (skipped > left) keep(full - value);
+        return;
+      }
+      const size = cuts[next] ?? 0;
+      const most = Math.min(this.left[next] ?? 0, Math.floor(left / size));
+      for (let n = most; n >= 0; n--) {
+        counts[next] = (counts[next] ?? 0) + n;
+        const passed = n < (this.left[next] ?? 0) ? Math.min(skipped, size) : skipped;
+        fill(next + 1, left - n * size, value + n * (prices[next] ?? 0), passed);
+        counts[next] = (counts[next] ?? 0) - n;
+      }
+    };
+    counts[first] = 1;
+    this.left[first] = (this.left[first] ?? 0) - 1;
+    fill(first, room - (cuts[first] ?? 0), prices[first] ?? 0, Infinity);
+    this.left[first] = (this.left[first] ?? 0) + 1;
+    return found.sort((a, b) => a.waste - b.waste);
+  }
+
+  /** Without any packing the search goes on a little: the first one is worth most. */
+  private spent(): boolean {
+    return this.steps > (this.best ? 1 : 4) * this.job.steps;
+  }
+
+  /** What the bound counts for this site: the sections at their prices, and the drivers that it takes for granted. */
+  private counted(): number {
+    const { job } = this;
+    const sections = job.counts.reduce((sum, own, kind) => sum + own * (job.prices[kind] ?? 0), 0);
+    return job.own.reduce((sum, b) => sum + grantedCost(job.bound, job.region, b), sections);
+  }
+
+  private finish(): void {
+    const cost = this.drivers.reduce((sum, own, i) => sum + own * this.bin(i).cost, 0);
+    const waste = cost - this.counted();
+    if (waste >= this.budget) return;
+    this.budget = waste;
+    this.best = { cost, channels: this.channels.map((own) => ({ ...own })) };
+  }
+
+  /** What channels that stand open must waste, as the sections left can't fill them. */
+  private idle(): number {
+    let open = 0;
+    for (let i = 0; i < this.free.length; i++) {
+      const own = this.worth(i);
+      open += (this.free[i] ?? 0) * (own[own.length - 1] ?? 0);
+    }
+    if (open === 0) return 0;
+    const value = this.left.reduce((sum, own, kind) => sum + own * (this.job.prices[kind] ?? 0), 0);
+    return Math.max(0, open - value);
+  }
+
+  private reachedBefore(waste: number): boolean {
+    const key = `${this.left.join()}|${this.free.join()}|${this.drivers.join()}`;
+    const before = this.seen.get(key);
+    if (before !== undefined && before <= waste) return true;
+    this.seen.set(key, waste);
+    return false;
+  }
+
+  search(waste: number): void {
+    if (waste + this.idle() >= this.budget) return;
+    const first = this.left.findIndex((own) => own > 0);
+    if (first < 0) return this.finish();
+    if (this.reachedBefore(waste)) return;
+    const moves: { i: number; fill: Fill; opening: number; waste: number }[] = [];
+    this.job.own.forEach((b, i) => {
+      if (this.bin(i).cuts < (this.job.cuts[first] ?? 0)) return;
+      let opening = 0;
+      if ((this.free[i] ?? 0) === 0) {
+        const drivers = this.drivers[i] ?? 0;
+        if (drivers >= (this.job.region.most[b] ?? 0)) return;
+        if (drivers >= (this.job.region.least[b] ?? 0))
+          opening = Math.max(0, this.job.bound.driverCosts[b] ?? 0);
+      }
+      const spent = waste + opening;
+      for (const fill of this.fills(i, first, this.budget - spent))
+        moves.push({ i, fill, opening, waste: spent + fill.waste });
+    });
+    moves.sort((a, b) => a.waste - b.waste || this.bin(a.i).cost - this.bin(b.i).cost);
+    for (const move of moves) {
+      if (this.spent()) {
+        this.complete = false;
+        return;
+      }
+      this.take(move.i, move.fill, move.waste);
+    }
+    return undefined;
+  }
+
+  private take(i: number, { counts }: Fill, waste: number): void {
+    const opens = (this.free[i] ?? 0) === 0;
+    const channels = this.bin(i).channels;
+    if (opens) this.drivers[i] = (this.drivers[i] ?? 0) + 1;
+    this.free[i] = (this.free[i] ?? 0) + (opens ? channels : 0) - 1;
+    counts.forEach((own, kind) => (this.left[kind] = (this.left[kind] ?? 0) - own));
+    this.channels.push({ bin: this.job.own[i] ?? 0, counts });
+    this.search(waste);
+    this.channels.pop();
+    counts.forEach((own, kind) => (this.left[kind] = (this.left[kind] ?? 0) + own));
+    this.free[i] = (this.free[i] ?? 0) - (opens ? channels : 0) + 1;
+    if (opens) this.drivers[i] = (this.drivers[i] ?? 0) - 1;
+  }
+}
+
+/** The cheapest packing that wastes less than the budget, or null; `complete` says that there is none cheaper. */
+export function packSite(job: PackJob, budget: number): { best: Packing | null; complete: boolean } {
+  const packer = new Packer(job, budget);
+  packer.search(0);
+  return { best: packer.best, complete: packer.complete };
+}
