@@ -21,6 +21,7 @@ export class Area extends Model<InferAttributes<Area>, InferCreationAttributes<A
   declare ambientCelsius: CreationOptional<string | null>;
   declare environment: CreationOptional<string>;
   declare hazards: CreationOptional<Record<string, unknown>>;
+  declare details: CreationOptional<Record<string, unknown>>;
   declare notes: CreationOptional<string>;
   declare version: CreationOptional<number>;
   declare archivedAt: CreationOptional<Date | null>;
@@ -42,6 +43,7 @@ export function initArea(sequelize: Sequelize): void {
       ambientCelsius: { type: DataTypes.DECIMAL(14, 4) },
       environment: { type: DataTypes.TEXT },
       hazards: { type: DataTypes.JSONB },
+      details: { type: DataTypes.JSONB },
       notes: { type: DataTypes.TEXT },
       version: { type: DataTypes.INTEGER },
       archivedAt: { type: DataTypes.DATE },

@@ -22,6 +22,7 @@ export class ExistingLuminaire extends Model<
   declare wattsSource: CreationOptional<string>;
   declare supplyVolts: CreationOptional<string | null>;
   declare electrical: CreationOptional<Record<string, unknown>>;
+  declare details: CreationOptional<Record<string, unknown>>;
   declare notes: CreationOptional<string>;
   declare version: CreationOptional<number>;
   declare archivedAt: CreationOptional<Date | null>;
@@ -41,6 +42,7 @@ export function initExistingLuminaire(sequelize: Sequelize): void {
       wattsSource: { type: DataTypes.TEXT },
       supplyVolts: { type: DataTypes.DECIMAL(14, 4) },
       electrical: { type: DataTypes.JSONB },
+      details: { type: DataTypes.JSONB },
       notes: { type: DataTypes.TEXT },
       version: { type: DataTypes.INTEGER },
       archivedAt: { type: DataTypes.DATE },

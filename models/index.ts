@@ -33,6 +33,9 @@ import { VisitCrew, initVisitCrew } from './visit-crew';
 import { SheetEvent, initSheetEvent } from './sheet-event';
 import { Photo, initPhoto } from './photo';
 import { JobClosing, initJobClosing } from './job-closing';
+import { IlluminanceReading, initIlluminanceReading } from './illuminance-reading';
+import { UtilityAccount, initUtilityAccount } from './utility-account';
+import { LuminaireType, initLuminaireType } from './luminaire-type';
 
 registerModels((sequelize) => {
   initShop(sequelize);
@@ -68,6 +71,9 @@ registerModels((sequelize) => {
   initSheetEvent(sequelize);
   initPhoto(sequelize);
   initJobClosing(sequelize);
+  initIlluminanceReading(sequelize);
+  initUtilityAccount(sequelize);
+  initLuminaireType(sequelize);
 });
 
 export {
@@ -104,4 +110,7 @@ export {
   SheetEvent,
   Photo,
   JobClosing,
+  IlluminanceReading,
+  UtilityAccount,
+  LuminaireType,
 };

@@ -25,7 +25,7 @@ export function PhotoStrip({
 }: {
   /** `/api/v1/shops/…/jobs/…/photos` */
   base: string;
-  subject: { type: 'area' | 'circuit'; id: string };
+  subject: { type: 'area' | 'existing-luminaire' | 'circuit'; id: string };
   name: string;
   settings: ShopSettings;
 }) {

@@ -3,12 +3,16 @@ import { PhotoStrip } from '@/components/photos/photo-strip';
 import { Button } from '@/components/ui/button';
 import { Sheet } from '@/components/ui/sheet';
 import type { Area } from '@/lib/surveys/schema';
+import { NO_LUMINAIRE_DETAILS } from '@/lib/surveys/schema/details';
 import { formatLength, formatNumber } from '@/lib/units';
+import { AreaDetailsFields } from './area-details';
 import { ChangeLines } from './change-lines';
 import { Coves } from './coves';
-import { ChoiceField, LengthField, LineField, NotesField, NumberField, TemperatureField } from './fields';
+import { ChoiceField, LengthField, LineField, NotesField, TemperatureField } from './fields';
 import { Hazards } from './hazards';
+import { Hours } from './hours';
 import { Luminaires } from './luminaires';
+import { Readings } from './readings';
 import type { Kept, Survey } from './use-survey';
 
 const ENVIRONMENTS = [
@@ -38,7 +42,14 @@ function duplicate(area: Kept<Area>, survey: Survey): void {
     position: area.data.position + 1,
   });
   for (const one of survey.luminaires.filter((luminaire) => luminaire.data.areaId === area.id))
-    survey.add('luminaires', crypto.randomUUID(), { ...one.data, areaId: id, countConfidence: 'estimated' });
+    survey.add('luminaires', crypto.randomUUID(), {
+      ...one.data,
+      areaId: id,
+      countConfidence: 'estimated',
+      details: { ...NO_LUMINAIRE_DETAILS, ...one.data.details, recounts: [] },
+    });
+  for (const one of survey.coves.filter((cove) => cove.data.areaId === area.id))
+    survey.add('coves', crypto.randomUUID(), { ...one.data, areaId: id });
 }
 
 function Sizes({ area, survey, set }: { area: Area; survey: Survey; set: (change: Partial<Area>) => void }) {
@@ -62,14 +73,6 @@ function Sizes({ area, survey, set }: { area: Area; survey: Survey; set: (change
         settings={settings}
         value={area.heightMetres}
         onSave={(heightMetres) => set({ heightMetres })}
-      />
-      <NumberField
-        label="Hours a week"
-        unit="h"
-        min={0}
-        max={168}
-        value={area.weeklyHours}
-        onSave={(weeklyHours) => set({ weeklyHours })}
       />
       <TemperatureField
         label="Ambient"
@@ -123,9 +126,12 @@ export function AreaCard({
             <LineField label="Used for" value={area.data.use} onSave={(use) => set({ use })} />
           </div>
           <Sizes area={area.data} survey={survey} set={set} />
+          <Hours area={area.data} set={set} />
           <Luminaires areaId={area.id} survey={survey} />
           <Coves areaId={area.id} survey={survey} />
           <ChangeLines areaId={area.id} survey={survey} />
+          <AreaDetailsFields area={area.data} survey={survey} set={set} />
+          <Readings areaId={area.id} survey={survey} />
           <Hazards area={area.data} set={set} />
           <PhotoStrip
             base={survey.photosUrl}

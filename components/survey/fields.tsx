@@ -4,8 +4,11 @@ import { useId, useState } from 'react';
 import { FigureInput, SelectInput, TextArea, TextInput } from '@/components/ui/field';
 import {
   formatLength,
+  illuminanceFigure,
+  illuminanceUnit,
   plainNumber,
   lengthUnit,
+  parseIlluminance,
   parseLength,
   parseNumber,
   parseTemperature,
@@ -114,10 +117,16 @@ function ParsedField({
 
 const plain = (value: number) => plainNumber(value);
 
-export function NumberField({ min, max, ...rest }: NumberLike & { min?: number; max?: number }) {
+export function NumberField({
+  min,
+  max,
+  whole = false,
+  ...rest
+}: NumberLike & { min?: number; max?: number; whole?: boolean }) {
   const parse: Parser = (text) => {
     const parsed = parseNumber(text);
     if (!parsed.ok) return parsed;
+    if (whole && !Number.isInteger(parsed.value)) return { ok: false, message: 'A whole number.' };
     if (min !== undefined && parsed.value < min) return { ok: false, message: `At least ${min}.` };
     if (max !== undefined && parsed.value > max) return { ok: false, message: `At most ${max}.` };
     return parsed;
@@ -154,6 +163,49 @@ export function TemperatureField({ settings, ...rest }: NumberLike & { settings:
       unit={us ? '°F' : '°C'}
       parse={(text) => parseTemperature(text, settings)}
       show={(value) => plain(Math.round((us ? value * 1.8 + 32 : value) * 10) / 10)}
+    />
+  );
+}
+
+export function IlluminanceField({ settings, ...rest }: NumberLike & { settings: ShopSettings }) {
+  return (
+    <ParsedField
+      {...rest}
+      unit={illuminanceUnit(settings)}
+      parse={(text) => parseIlluminance(text, settings)}
+      show={(value) => illuminanceFigure(value, settings)}
+    />
+  );
+}
+
+/** A day; emptied, it is not known. */
+export function DateField({
+  value,
+  onSave,
+  ...rest
+}: Common & { value: string | null; onSave: (value: string | null) => void }) {
+  const id = useId();
+  return (
+    <TextInput
+      id={id}
+      {...rest}
+      type="date"
+      value={value ?? ''}
+      onChange={(event) => onSave(event.target.value || null)}
+    />
+  );
+}
+
+/** A share of one, typed as a percentage. */
+export function PercentField({ value, onSave, ...rest }: NumberLike) {
+  return (
+    <NumberField
+      {...rest}
+      unit="%"
+      min={0}
+      max={100}
+      value={value === null ? null : Math.round(value * 1e4) / 100}
+      onSave={(percent) => onSave(percent === null ? null : percent / 100)}
     />
   );
 }

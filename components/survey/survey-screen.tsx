@@ -4,8 +4,10 @@ import { useState } from 'react';
 import { Button, ButtonLink } from '@/components/ui/button';
 import { EmptyState, Sheet } from '@/components/ui/sheet';
 import { finishSurvey } from '@/lib/jobs/actions';
+import { NO_AREA_DETAILS } from '@/lib/surveys/schema/details';
 import { AreaCard } from './area-card';
 import { SyncStatus } from './status';
+import { Utility } from './utility';
 import { type Survey, useSurvey } from './use-survey';
 
 function addArea(survey: Survey): string {
@@ -23,6 +25,7 @@ function addArea(survey: Survey): string {
     ambientCelsius: null,
     environment: 'dry',
     hazards: {},
+    details: NO_AREA_DETAILS,
     notes: '',
   });
   return id;
@@ -125,6 +128,7 @@ export function SurveyScreen(props: { shopId: string; membershipId: string; jobI
       <div>
         <Button onClick={() => setOpen(addArea(survey))}>Add an area</Button>
       </div>
+      <Utility survey={survey} />
       <Finish survey={survey} shopId={props.shopId} jobId={props.jobId} />
     </div>
   );

@@ -6,6 +6,7 @@ import { type OfflineScope, useOffline } from '@/lib/offline/use-offline';
 import type { PartFigures } from '@/lib/parts/schema';
 import type { Answer } from '@/lib/engine/contract';
 import type { Area, ChangeLine, CircuitBody, Collection, Cove, Luminaire } from '@/lib/surveys/schema';
+import type { OwnType, Reading, UtilityAccount } from '@/lib/surveys/schema/site';
 import { DEFAULT_SETTINGS, type ShopSettings } from '@/lib/units/settings';
 
 export interface Kept<T> {
@@ -35,6 +36,10 @@ export interface Survey {
   coves: Kept<Cove>[];
   circuits: Kept<CircuitBody & Figured>[];
   changeLines: Kept<ChangeLine & Figured>[];
+  readings: Kept<Reading>[];
+  accounts: Kept<UtilityAccount>[];
+  /** Types that the shop keeps, from any of its jobs. */
+  ownTypes: Kept<OwnType>[];
   /** A new entry. */
   add: (collection: Collection, id: string, data: object) => void;
   /** An edit of what is shown: only what it changed is written. */
@@ -73,6 +78,9 @@ export function useSurvey(options: { shopId: string; membershipId: string; jobId
       changeLines: pick<ChangeLine & Figured>('change-lines').sort(
         (a, b) => a.data.position - b.data.position,
       ),
+      readings: pick<Reading>('readings').sort((a, b) => a.data.readAt.localeCompare(b.data.readAt)),
+      accounts: pick<UtilityAccount>('utility-accounts'),
+      ownTypes: pick<OwnType>('luminaire-types'),
     };
   }, [entities]);
 

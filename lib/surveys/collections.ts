@@ -1,8 +1,18 @@
 /** How each collection of a survey is stored: its table, and what goes between a phone's body and a row. */
 import * as z from 'zod/mini';
-import { Area, ChangeLine, Circuit, Cove, ExistingLuminaire } from '@/models';
+import {
+  Area,
+  ChangeLine,
+  Circuit,
+  Cove,
+  ExistingLuminaire,
+  IlluminanceReading,
+  LuminaireType,
+  UtilityAccount,
+} from '@/models';
 import type { Entity } from '@/lib/offline/protocol';
 import { type Collection, COLLECTIONS } from './schema';
+import { areaDetails, luminaireDetails } from './schema/details';
 
 interface Row {
   id: string;
@@ -28,7 +38,13 @@ export const TABLES: Record<Collection, Table> = {
   coves: Cove as unknown as Table,
   circuits: Circuit as unknown as Table,
   'change-lines': ChangeLine as unknown as Table,
+  readings: IlluminanceReading as unknown as Table,
+  'utility-accounts': UtilityAccount as unknown as Table,
+  'luminaire-types': LuminaireType as unknown as Table,
 };
+
+/** Kept from one job, offered in every job of the shop. */
+export const SHOP_WIDE: ReadonlySet<Collection> = new Set(['luminaire-types']);
 
 /** Decimal columns arrive as strings; phones work with numbers. */
 const NUMBERS = new Set([
@@ -45,6 +61,9 @@ const NUMBERS = new Set([
   'oldQuantity',
   'newQuantity',
   'newWatts',
+  'lux',
+  'energyRate',
+  'demandRate',
 ]);
 
 const fieldsOf = (collection: Collection): string[] =>
@@ -56,11 +75,23 @@ const FIGURED: Partial<Record<Collection, string[]>> = {
   'change-lines': ['answer', 'openStops'],
 };
 
+/** Details that an older row does not have yet are unknown, not missing. */
+const DETAILS: Partial<Record<Collection, z.ZodMiniType>> = {
+  areas: areaDetails,
+  luminaires: luminaireDetails,
+};
+
+function asSent(collection: Collection, field: string, value: unknown): unknown {
+  if (value instanceof Date) return value.toISOString();
+  if (NUMBERS.has(field) && typeof value === 'string') return Number(value);
+  const details = field === 'details' ? DETAILS[collection] : undefined;
+  return details ? z.parse(details, value ?? {}) : value;
+}
+
 export function toEntity(collection: Collection, row: Row & Record<string, unknown>): Entity {
   const data: Record<string, unknown> = {};
   for (const field of [...fieldsOf(collection), ...(FIGURED[collection] ?? [])]) {
-    const value = row[field];
-    data[field] = NUMBERS.has(field) && typeof value === 'string' ? Number(value) : value;
+    data[field] = asSent(collection, field, row[field]);
   }
   return { collection, id: row.id, version: row.version, archived: row.archivedAt !== null, data };
 }

@@ -12,7 +12,7 @@ import { run, select, withShop } from '@/lib/platform/db';
 import { AppError, notAllowed, notFound, toAppError } from '@/lib/platform/http/errors';
 import { canonical, sha256 } from '@/lib/platform/http/hash';
 import { PROTOCOL } from '@/lib/offline/protocol';
-import { TABLES, toEntity } from './collections';
+import { SHOP_WIDE, TABLES, toEntity } from './collections';
 import { serverFigures } from './recompute';
 import { type Collection, COLLECTIONS, type OverrideInput } from './schema';
 
@@ -66,7 +66,8 @@ async function write(jobId: string, shopId: string, event: ClientEvent): Promise
   const body = parseBody(collection, event.body);
   await checkReferences(jobId, body);
   const before = await table.findOne({ where: { id: event.entityId } });
-  if (before && before.get({ plain: true })['jobId'] !== jobId) throw notFound('This entry');
+  if (before && !SHOP_WIDE.has(collection) && before.get({ plain: true })['jobId'] !== jobId)
+    throw notFound('This entry');
   const archivedAt = archive ? new Date() : null;
   const values = { ...body, ...(await serverFigures(collection, event.entityId, body)), archivedAt };
   if (!before) await table.create({ shopId, id: event.entityId, jobId, ...values });

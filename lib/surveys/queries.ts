@@ -6,7 +6,7 @@ import { withShop } from '@/lib/platform/db';
 import { canonical, sha256 } from '@/lib/platform/http/hash';
 import { getShop, settingsOf } from '@/lib/shops/queries';
 import { getJob } from '@/lib/jobs/queries';
-import { TABLES, toEntity } from './collections';
+import { SHOP_WIDE, TABLES, toEntity } from './collections';
 import { type Collection, COLLECTIONS } from './schema';
 import { describeChange } from './describe';
 
@@ -15,7 +15,8 @@ export async function surveySnapshot(shopId: string, jobId: string) {
   const shop = await getShop(shopId);
   const entities: Entity[] = [];
   for (const collection of Object.keys(COLLECTIONS) as Collection[]) {
-    const rows = await TABLES[collection].findAll({ where: { jobId, archivedAt: null } });
+    const where = SHOP_WIDE.has(collection) ? { archivedAt: null } : { jobId, archivedAt: null };
+    const rows = await TABLES[collection].findAll({ where });
     entities.push(...rows.map((row) => toEntity(collection, row.get({ plain: true }) as never)));
   }
   return {

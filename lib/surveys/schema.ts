@@ -1,6 +1,8 @@
 /** What a survey holds, as phones send it. zod/mini: the survey screen loads it. */
 import * as z from 'zod/mini';
 import { circuitChoices } from '@/lib/circuits/schema/electrical';
+import { areaDetails, HOURS_IN_YEAR, luminaireDetails, yesNo } from './schema/details';
+import { ownType, reading, utilityAccount } from './schema/site';
 
 const name = z
   .string()
@@ -11,7 +13,6 @@ const length = z.nullable(
 );
 const quantity = z.number().check(z.nonnegative('must not be negative'), z.maximum(1_000_000, 'is too many'));
 const position = z.number().check(z.int(), z.minimum(0), z.maximum(100_000));
-const yesNo = z.enum(['yes', 'no', 'unknown']);
 
 export const HAZARDS = [
   'suspectBallasts',
@@ -23,21 +24,33 @@ export const HAZARDS = [
   'noIsolationPoint',
 ] as const;
 
-export const area = z.strictObject({
-  position,
-  name,
-  use: text(120),
-  lengthMetres: length,
-  widthMetres: length,
-  heightMetres: length,
-  weeklyHours: z.nullable(
-    z.number().check(z.minimum(0, 'must not be negative'), z.maximum(168, 'a week has 168 hours')),
-  ),
-  ambientCelsius: z.nullable(z.number().check(z.minimum(-60), z.maximum(80, 'is hotter than any area'))),
-  environment: z.enum(['dry', 'damp', 'wet']),
-  hazards: z.partialRecord(z.enum(HAZARDS), yesNo),
-  notes: text(4_000),
-});
+/** Hours a week times weeks a year, where both are given: no more than a year has. */
+const withinYear = z.refine<{ weeklyHours: number | null; details: { weeksPerYear: number | null } }>(
+  ({ weeklyHours, details }) => (weeklyHours ?? 0) * (details.weeksPerYear ?? 0) <= HOURS_IN_YEAR,
+  {
+    path: ['details', 'weeksPerYear'],
+    error: 'With these hours a week, a year would have more than 8,760 hours.',
+  },
+);
+
+export const area = z
+  .strictObject({
+    position,
+    name,
+    use: text(120),
+    lengthMetres: length,
+    widthMetres: length,
+    heightMetres: length,
+    weeklyHours: z.nullable(
+      z.number().check(z.minimum(0, 'must not be negative'), z.maximum(168, 'a week has 168 hours')),
+    ),
+    ambientCelsius: z.nullable(z.number().check(z.minimum(-60), z.maximum(80, 'is hotter than any area'))),
+    environment: z.enum(['dry', 'damp', 'wet']),
+    hazards: z.partialRecord(z.enum(HAZARDS), yesNo),
+    details: z.prefault(areaDetails, {}),
+    notes: text(4_000),
+  })
+  .check(withinYear);
 export type Area = z.infer<typeof area>;
 
 /** How the existing luminaire is wired: what the retrofit check asks. Unknown is an answer. */
@@ -60,6 +73,7 @@ export const luminaire = z.strictObject({
   wattsSource: z.enum(['nameplate', 'measured', 'datasheet', 'typical']),
   supplyVolts: z.nullable(z.number().check(z.positive(), z.maximum(1_000, 'is above low voltage'))),
   electrical: existingElectrical,
+  details: z.prefault(luminaireDetails, {}),
   notes: text(4_000),
 });
 export type Luminaire = z.infer<typeof luminaire>;
@@ -126,6 +140,9 @@ export const COLLECTIONS = {
   coves: cove,
   circuits: circuit,
   'change-lines': changeLine,
+  readings: reading,
+  'utility-accounts': utilityAccount,
+  'luminaire-types': ownType,
 } as const;
 export type Collection = keyof typeof COLLECTIONS;
 

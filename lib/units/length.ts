@@ -79,6 +79,8 @@ export function parseLength(text: string, settings: LengthSettings): Parsed<numb
   const bare = mixedNumber(clean);
   const value =
     bare === null ? (metric(clean) ?? feetAndInches(clean)) : bare * (settings.units === 'us' ? FEET : 1);
+  if (value === null && /['"]/.test(clean) && /\d\s*[cm]?m\b/.test(clean))
+    return unread('Two units in one length: type feet and inches, or metres.');
   if (value === null || !Number.isFinite(value))
     return unread(`Type a length such as ${settings.units === 'us' ? `12' 6"` : '3.8'}.`);
   return parsed(value);

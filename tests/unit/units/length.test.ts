@@ -61,6 +61,13 @@ describe('parseLength', () => {
   });
 });
 
+it.each([`3 m 6"`, `12' 20 cm`, `3.2m 4'`])('names two units in one length: %s', (text) => {
+  expect(parseLength(text, US)).toEqual({
+    ok: false,
+    message: 'Two units in one length: type feet and inches, or metres.',
+  });
+});
+
 describe('formatLength', () => {
   it.each([
     [0, `0' 0"`],
