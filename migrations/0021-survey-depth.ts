@@ -11,7 +11,7 @@ export const up: Migration = async ({ context }) => {
       job_id uuid not null,
       area_id uuid not null,
       place text not null check (length(place) between 1 and 120),
-      lux numeric(14,4) not null check (lux >= 0),
+      lux numeric(14,4) check (lux >= 0),
       taken text not null check (taken in ('before', 'after')),
       daylight text not null default 'unknown' check (daylight in ('none', 'some', 'unknown')),
       meter text not null default '',

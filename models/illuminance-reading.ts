@@ -16,7 +16,7 @@ export class IlluminanceReading extends Model<
   declare jobId: string;
   declare areaId: string;
   declare place: string;
-  declare lux: string;
+  declare lux: CreationOptional<string | null>;
   declare taken: string;
   declare daylight: CreationOptional<string>;
   declare meter: CreationOptional<string>;
@@ -35,7 +35,7 @@ export function initIlluminanceReading(sequelize: Sequelize): void {
       jobId: { type: DataTypes.UUID, allowNull: false },
       areaId: { type: DataTypes.UUID, allowNull: false },
       place: { type: DataTypes.TEXT, allowNull: false },
-      lux: { type: DataTypes.DECIMAL(14, 4), allowNull: false },
+      lux: { type: DataTypes.DECIMAL(14, 4) },
       taken: { type: DataTypes.TEXT, allowNull: false },
       daylight: { type: DataTypes.TEXT },
       meter: { type: DataTypes.TEXT },

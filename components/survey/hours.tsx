@@ -61,12 +61,11 @@ export function Hours({ area, set }: { area: Area; set: (change: Partial<Area>) 
         </Button>
       </div>
       {days ? (
-        <div className="grid grid-cols-4 gap-2 sm:grid-cols-7">
+        <div role="group" aria-label="Hours each day" className="grid grid-cols-4 gap-2 sm:grid-cols-7">
           {DAYS.map((day, index) => (
             <NumberField
               key={day}
               label={day}
-              unit="h"
               min={0}
               max={24}
               value={days[index] ?? 0}

@@ -30,9 +30,8 @@ function Entry({ one, survey }: { one: Kept<Reading>; survey: Survey }) {
         <IlluminanceField
           label="Light"
           settings={survey.settings}
-          required="Type what the meter said."
           value={one.data.lux}
-          onSave={(lux) => set({ lux: lux ?? 0 })}
+          onSave={(lux) => set({ lux })}
         />
         <ChoiceField
           label="Taken"
@@ -79,7 +78,7 @@ export function Readings({ areaId, survey }: { areaId: string; survey: Survey })
     survey.add('readings', crypto.randomUUID(), {
       areaId,
       place: `Point ${here.length + 1}`,
-      lux: 0,
+      lux: null,
       taken: last?.taken ?? 'before',
       daylight: last?.daylight ?? 'unknown',
       meter: last?.meter ?? '',

@@ -127,6 +127,12 @@ describe('light that was measured', () => {
     expect(entities.find((one) => one.id === answer.entity?.id)?.data).toEqual(sent);
   });
 
+  it('a point may be marked before it is read', async () => {
+    expect(await put('readings', { ...reading(), lux: null })).toMatchObject({
+      entity: { data: { lux: null } },
+    });
+  });
+
   it.each([
     ['lux', -1],
     ['place', ' '],

@@ -12,7 +12,8 @@ const notNegative = (most: number) =>
 export const reading = z.strictObject({
   areaId: z.uuid(),
   place: named(120, 'Say where it was read.'),
-  lux: notNegative(200_000),
+  /** Null: the point is marked, and not read yet. */
+  lux: z.nullable(notNegative(200_000)),
   taken: z.enum(['before', 'after']),
   /** What else lit the point. */
   daylight: z.enum(['none', 'some', 'unknown']),
