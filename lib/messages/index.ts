@@ -9,6 +9,7 @@ import { findings } from './en/findings';
 import { benchAndBusFindings, benchAndBusWorking } from './en/findings-bench-and-bus';
 import { circuitFindings } from './en/findings-circuits';
 import { constantCurrentFindings } from './en/findings-constant-current';
+import { photometryFindings, photometryWorking } from './en/findings-photometry';
 import { retrofitFindings } from './en/findings-retrofit';
 import { tapePlanFindings } from './en/findings-tape-plan';
 import { jobs } from './en/jobs';
@@ -35,6 +36,8 @@ const catalogue = catalogueOf({
   ...constantCurrentFindings,
   ...benchAndBusFindings,
   ...benchAndBusWorking,
+  ...photometryFindings,
+  ...photometryWorking,
   ...retrofitFindings,
   ...tapePlanFindings,
   ...labels,

@@ -216,6 +216,18 @@ export const EXAMPLES: Readonly<Record<string, Record<string, unknown>>> = {
     breaker: { amps: 20 },
     hazards: { sharedNeutral: 'no', noIsolationPoint: 'no' },
   },
+  'photometric-file': {
+    text: [
+      'IESNA:LM-63-2002',
+      '[TEST] a round downlight',
+      'TILT=NONE',
+      '1 -1 1 4 1 1 2 -0.2 -0.2 0',
+      '1 1 20',
+      '0 30 60 90',
+      '0',
+      '1000 866 500 0',
+    ].join('\n'),
+  },
   'price-lines': {
     currency: 'USD',
     taxRounding: 'line',

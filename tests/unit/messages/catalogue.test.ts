@@ -6,7 +6,7 @@ import { fillTerms } from '@/lib/messages/terms';
 import { DEFAULT_SETTINGS } from '@/lib/units';
 import { engineCodes } from '../../support/engine-codes';
 
-const ENGINE = ['lib/sizing', 'lib/pricing', 'lib/circuits/schema'];
+const ENGINE = ['lib/sizing', 'lib/lighting', 'lib/pricing', 'lib/circuits/schema'];
 const METRIC = { ...DEFAULT_SETTINGS, units: 'metric', currency: 'GBP', locale: 'en-GB' } as const;
 
 describe('what the engine can say', () => {
