@@ -49,6 +49,18 @@ const schema = z.strictObject({
     .check(z.minLength(1, 'needs at least one feed'), z.maxLength(1000, 'holds at most 1,000 feeds')),
   sourceOhms: z.optional(notNegative),
   celsius: z.optional(celsius),
+  /** Bad joints: resistance in one rail at a boundary between two cuts (1 to cuts - 1). */
+  joints: z.optional(
+    z
+      .array(
+        z.strictObject({
+          at: z.number().check(z.int('must be a whole number of cuts'), z.minimum(1, 'must be at least 1')),
+          rail: z.enum(['positive', 'negative']),
+          ohms: notNegative,
+        }),
+      )
+      .check(z.maxLength(1000, 'holds at most 1,000 joints')),
+  ),
 });
 
 export interface TapeAnalysis {
@@ -71,6 +83,10 @@ function check(input: TapeInput, limits: Limits): void {
   input.feeds.forEach(({ at }, i) => {
     if (at > input.cuts)
       refuse(`feeds.${i}.at`, `must not be beyond the end of the tape, boundary ${input.cuts}`);
+  });
+  input.joints?.forEach(({ at }, i) => {
+    if (at >= input.cuts)
+      refuse(`joints.${i}.at`, `must lie between two cuts, at most at boundary ${input.cuts - 1}`);
   });
 }
 

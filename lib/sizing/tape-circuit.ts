@@ -11,6 +11,14 @@ export interface TapeFeed {
   sourceOhms?: number | undefined;
 }
 
+/** A bad joint in one rail, between two cuts. */
+export interface RailJoint {
+  /** Boundary, 1 to cuts - 1; a feed at the same boundary joins on the side of the start. */
+  at: number;
+  rail: 'positive' | 'negative';
+  ohms: number;
+}
+
 export interface Rails {
   cuts: number;
   cutMetres: number;
@@ -67,11 +75,14 @@ export function sourcesOf(feeds: readonly TapeFeed[], sourceOhms: number | undef
   }));
 }
 
-/** A feed in the order of the tape, as the solver wants it. */
+/** A feed, or a bad joint of the rails, in the order of the tape, as the solver wants it. */
 export interface Joint {
-  /** As given. */
+  /** As given; of a bad joint its place among the tape's joints. */
   index: number;
+  /** -1 for a bad joint of the rails: no conductors join there. */
   source: number;
+  /** In the rails just after this place, ohm; null where a feed joins. */
+  inRails: { positive: number; negative: number } | null;
   at: number;
   /** Of its source. */
   volts: number;
@@ -101,7 +112,29 @@ export interface TapeCircuit {
   highestVolts: number;
 }
 
-function jointsOf(feeds: readonly TapeFeed[], sources: readonly Source[]): Joint[] {
+export const isFeed = (joint: Joint) => joint.inRails === null;
+
+/** No conductors: both currents are nought, which is what a tie says of all but its first. */
+const railJoint = ({ at, rail, ohms }: RailJoint, index: number): Joint => ({
+  index,
+  source: -1,
+  inRails: {
+    positive: rail === 'positive' ? ohmsOrNone(ohms) : 0,
+    negative: rail === 'negative' ? ohmsOrNone(ohms) : 0,
+  },
+  at,
+  volts: 0,
+  positiveOhms: 0,
+  negativeOhms: 0,
+  positiveTie: 0,
+  negativeTie: 0,
+});
+
+function jointsOf(
+  feeds: readonly TapeFeed[],
+  sources: readonly Source[],
+  railJoints: readonly RailJoint[],
+): Joint[] {
   const joints = sources.flatMap((source, s) =>
     source.feeds.map((index): Joint => {
       const feed = feeds[index] as TapeFeed;
@@ -110,6 +143,7 @@ function jointsOf(feeds: readonly TapeFeed[], sources: readonly Source[]): Joint
       return {
         index,
         source: s,
+        inRails: null,
         at: feed.at,
         volts: source.volts,
         positiveOhms: ohmsOrNone(feed.positiveOhms + inSeries),
@@ -119,14 +153,16 @@ function jointsOf(feeds: readonly TapeFeed[], sources: readonly Source[]): Joint
       };
     }),
   );
-  return joints.sort((a, b) => a.at - b.at || a.index - b.index);
+  return [...joints, ...railJoints.map(railJoint)].sort(
+    (a, b) => a.at - b.at || Number(isFeed(b)) - Number(isFeed(a)) || a.index - b.index,
+  );
 }
 
 /** Every feed's negative conductor ends at the one negative terminal: zero ohms at one place are one conductor. */
 function tieNegatives(joints: Joint[], placeOf: (joint: Joint) => number): void {
   const owners = new Map<number, number>();
   joints.forEach((joint, i) => {
-    if (joint.negativeOhms > 0) return;
+    if (!isFeed(joint) || joint.negativeOhms > 0) return;
     const owner = owners.get(placeOf(joint));
     if (owner === undefined) owners.set(placeOf(joint), i);
     else joint.negativeTie = owner;
@@ -150,7 +186,12 @@ function tiePositives(
   const drops: SharedDrop[] = [];
   const owners = new Map<number, Map<number, number>>();
   const ideal = (source: number) => (sources[source]?.ohms ?? 0) === 0;
-  const zero = joints.map((_, i) => i).filter((i) => joints[i]?.positiveOhms === 0);
+  const zero = joints
+    .map((_, i) => i)
+    .filter((i) => {
+      const joint = joints[i] as Joint;
+      return isFeed(joint) && joint.positiveOhms === 0;
+    });
   for (const i of [...zero].sort(
     (a, b) => Number(ideal(joints[b]?.source ?? 0)) - Number(ideal(joints[a]?.source ?? 0)),
   )) {
@@ -180,19 +221,29 @@ export function tapeCircuit(
   feeds: readonly TapeFeed[],
   sources: readonly Source[],
   rails: Rails,
+  railJoints: readonly RailJoint[] = [],
 ): TapeCircuit {
   const highestVolts = sources.reduce((highest, { volts }) => Math.max(highest, volts), 0);
-  const joints = jointsOf(feeds, sources);
+  const joints = jointsOf(feeds, sources, railJoints);
   const { cuts, cutMetres, railOhmsPerMetre } = rails;
   const pieceOf = (ohmsPerMetre: number) => ohmsOrNone(ohmsPerMetre * cutMetres * cuts) / cuts;
   const pieceOhms = {
     positive: pieceOf(railOhmsPerMetre.positive),
     negative: pieceOf(railOhmsPerMetre.negative),
   };
-  // A rail without resistance is one place.
-  const place = (ohms: number) => (joint: Joint) => (ohms === 0 ? 0 : joint.at);
-  tieNegatives(joints, place(pieceOhms.negative));
-  const drops = tiePositives(joints, sources, place(pieceOhms.positive));
+  // A rail without resistance is one place, or as many as its bad joints make of it.
+  const place = (rail: 'positive' | 'negative') => {
+    if (pieceOhms[rail] > 0) return ({ at }: Joint) => at;
+    const places = new Map<Joint, number>();
+    let before = 0;
+    for (const joint of joints) {
+      places.set(joint, before);
+      if ((joint.inRails?.[rail] ?? 0) > 0) before++;
+    }
+    return (joint: Joint) => places.get(joint) ?? 0;
+  };
+  tieNegatives(joints, place('negative'));
+  const drops = tiePositives(joints, sources, place('positive'));
   sources.forEach(({ ohms, feeds: members }, s) => {
     if (ohms === 0 || members.length < 2) return;
     const own = joints.map((_, i) => i).filter((i) => joints[i]?.source === s);

@@ -6,10 +6,12 @@
  * draw on it; y = n - k*x (n the negative rail's volts) is carried by D = I+ - I-, dy = -(R+ * R- / R)*D, and no load
  * draws on it. So the cuts between two feeds are eliminated one by one, in sums of positive terms only, which keeps
  * every digit, allows zero ohms and costs the same for each cut; what is left is a band of six unknowns a feed.
+ * A bad joint of r ohms in one rail is a place of its own, where no current enters: with I+ = K + k*D and
+ * I- = K - (1-k)*D the volts beyond it are x + r*I and, in the positive rail, y - k*r*I, in the negative y + (1-k)*r*I.
  */
 import { EngineError } from '@/lib/engine/contract';
 import { banded, factor, type Factored, setEntry, solveFactored } from './banded';
-import type { Joint, SharedDrop, TapeCircuit } from './tape-circuit';
+import { isFeed, type Joint, type SharedDrop, type TapeCircuit } from './tape-circuit';
 
 /** Between two joints, or beyond the first or last (no current enters there). */
 interface Stretch {
@@ -40,7 +42,10 @@ const D = 5;
 export class TapeLadder {
   /** Drop of each load below the reference. */
   readonly drops: Float64Array;
-  /** Currents in and back of the feeds in the order of the joints; ties not yet shared out. */
+  /**
+   * Currents in and back of the feeds in the order of the joints, ties not yet shared out; of a bad joint what the
+   * rails carry through it.
+   */
   readonly positiveAmps: Float64Array;
   readonly negativeAmps: Float64Array;
   private readonly pieceOhms: number;
@@ -69,10 +74,12 @@ export class TapeLadder {
   solve(drawn: Float64Array, slope: Float64Array, referenceVolts: number): void {
     const seen = this.stretches.map((stretch, i) => this.eliminate(stretch, i, drawn, slope));
     const state = this.solveJoints(seen, referenceVolts);
-    for (let i = 0; i < this.circuit.joints.length; i++) {
-      this.positiveAmps[i] = state[i * UNKNOWNS + POSITIVE] ?? 0;
-      this.negativeAmps[i] = state[i * UNKNOWNS + NEGATIVE] ?? 0;
-    }
+    this.circuit.joints.forEach((joint, i) => {
+      const of = (unknown: number) => state[i * UNKNOWNS + unknown] ?? 0;
+      const k = this.negativeShare;
+      this.positiveAmps[i] = isFeed(joint) ? of(POSITIVE) : of(K) + k * of(D);
+      this.negativeAmps[i] = isFeed(joint) ? of(NEGATIVE) : of(K) - (1 - k) * of(D);
+    });
     this.stretches.forEach((stretch, i) => this.restore(stretch, i, state));
   }
 
@@ -93,8 +100,15 @@ export class TapeLadder {
       this.keptB[k] = seen.B;
       this.keptA[k] = seen.A;
     }
-    inSeries(seen, Math.abs(to - position) * this.pieceOhms);
+    inSeries(seen, Math.abs(to - position) * this.pieceOhms + this.beyondLast(i));
     return seen;
+  }
+
+  /** Bad joint just before the last stretch: both rails carry the same there, so its place in either is one. */
+  private beyondLast(i: number): number {
+    const { joints } = this.circuit;
+    const rails = i === joints.length ? joints[i - 1]?.inRails : undefined;
+    return rails ? rails.positive + rails.negative : 0;
   }
 
   /** The way back: from the joint at the far end to every load of the stretch. */
@@ -107,7 +121,8 @@ export class TapeLadder {
     let position = to;
     for (let n = 0; n < end - first; n++) {
       const k = step > 0 ? end - 1 - n : first + n;
-      const ohms = Math.abs(position - (k + 0.5)) * this.pieceOhms;
+      const lumped = n === 0 ? this.beyondLast(i) : 0;
+      const ohms = Math.abs(position - (k + 0.5)) * this.pieceOhms + lumped;
       const drawn = (this.keptB[k] ?? 0) - (this.keptA[k] ?? 0) * entering;
       drop = (drop + ohms * drawn) / (1 + (this.keptG[k] ?? 0) * ohms);
       position = k + 0.5;
@@ -162,13 +177,17 @@ export class TapeLadder {
         return;
       }
       // Along the stretch after: x, and y.
+      const { positive, negative } = joint.inRails ?? { positive: 0, negative: 0 };
       set(4, X, 1);
-      set(4, K, right.rho);
+      set(4, K, right.rho + positive + negative);
+      set(4, D, k * positive - (1 - k) * negative);
       set(4, X + UNKNOWNS, -right.A);
       rhs[at + 4] = right.e;
       set(5, Y + UNKNOWNS, 1);
       set(5, Y, -1);
-      set(5, D, ((joints[i + 1] as Joint).at - joint.at) * this.commonOhms);
+      set(5, K, k * positive - (1 - k) * negative);
+      const apart = ((joints[i + 1] as Joint).at - joint.at) * this.commonOhms;
+      set(5, D, apart + k * k * positive + (1 - k) * (1 - k) * negative);
     });
     return { matrix, rhs };
   }

@@ -2,6 +2,8 @@
 import { EngineError } from '@/lib/engine/contract';
 import { type SeriesString, stringAmps, stringSlopeOhms, stringVolts, thermalVolts } from './diode';
 import {
+  isFeed,
+  type RailJoint,
   type Rails,
   type Source,
   sourcesOf,
@@ -23,8 +25,19 @@ export type TapeLoad =
       seriesOhms: number;
     };
 
+/** A segment that is not as the others: its load gone, or some of its string's LEDs shorted. */
+export interface SegmentFault {
+  /** From 1. */
+  cut: number;
+  shortedLeds: number | 'open';
+}
+
 export interface TapeInput extends Rails {
   load: TapeLoad;
+  /** Bad joints in the rails. */
+  joints?: readonly RailJoint[] | undefined;
+  /** For whoever looks for a fault; not part of a drawing. */
+  segmentFaults?: readonly SegmentFault[] | undefined;
   feeds: readonly TapeFeed[];
   /** Of the source that the first feed stands behind, V and ohm; 0 unless given. */
   sourceOhms?: number | undefined;
@@ -44,6 +57,8 @@ export interface OperatingPoint {
   /** Below the highest source volts: more digits of a small drop than the load volts have. */
   loadDrops: Float64Array;
   loadAmps: Float64Array;
+  /** Through each bad joint of the rails, away from the tape's start in the positive, towards it in the negative. */
+  jointAmps: number[];
 }
 
 const LED_CELSIUS = 25;
@@ -63,9 +78,22 @@ interface Loads {
   amps: Float64Array;
 }
 
+type Faults = readonly SegmentFault[];
+
+const openIn = (figures: Float64Array, faults: Faults): Float64Array => {
+  for (const { cut, shortedLeds } of faults) if (shortedLeds === 'open') figures[cut - 1] = 0;
+  return figures;
+};
+
 /** A current that does not ask for volts, seen from the highest source volts. */
-function constantCurrents(ladder: TapeLadder, cuts: number, amps: number, volts: number): Loads {
-  const drawn = new Float64Array(cuts).fill(amps);
+function constantCurrents(
+  ladder: TapeLadder,
+  cuts: number,
+  amps: number,
+  volts: number,
+  faults: Faults,
+): Loads {
+  const drawn = openIn(new Float64Array(cuts).fill(amps), faults);
   ladder.solve(drawn, new Float64Array(cuts), volts);
   return { volts: ladder.drops.map((drop) => volts - drop), drops: ladder.drops, amps: drawn };
 }
@@ -73,10 +101,10 @@ function constantCurrents(ladder: TapeLadder, cuts: number, amps: number, volts:
 /** Under this share of the source volts, load volts keep more digits when seen from zero. */
 const LOW_SHARE = 0.01;
 
-function resistances(ladder: TapeLadder, cuts: number, ohms: number, volts: number): Loads {
-  const slope = new Float64Array(cuts).fill(1 / ohms);
+function resistances(ladder: TapeLadder, cuts: number, ohms: number, volts: number, faults: Faults): Loads {
+  const slope = openIn(new Float64Array(cuts).fill(1 / ohms), faults);
   const from = (reference: number) => {
-    ladder.solve(new Float64Array(cuts).fill(reference / ohms), slope, reference);
+    ladder.solve(openIn(new Float64Array(cuts).fill(reference / ohms), faults), slope, reference);
     return ladder.drops.map((drop) => reference - drop);
   };
   let found = from(volts);
@@ -85,16 +113,22 @@ function resistances(ladder: TapeLadder, cuts: number, ohms: number, volts: numb
     found = from(0);
     drops = found.map((own) => volts - own);
   }
-  return { volts: found, drops, amps: found.map((own) => own / ohms) };
+  return {
+    volts: found,
+    drops,
+    amps: openIn(
+      found.map((own) => own / ohms),
+      faults,
+    ),
+  };
 }
 
 /** No load gets more than the source can push through the feeds and half a piece: a start above what flows. */
 function startAmps(string: SeriesString, { pieceOhms, joints, highestVolts }: TapeCircuit): number {
   const half = (pieceOhms.positive + pieceOhms.negative) / 2;
-  const conductance = joints.reduce(
-    (sum, { positiveOhms, negativeOhms }) => sum + 1 / (positiveOhms + negativeOhms + half),
-    0,
-  );
+  const conductance = joints
+    .filter(isFeed)
+    .reduce((sum, { positiveOhms, negativeOhms }) => sum + 1 / (positiveOhms + negativeOhms + half), 0);
   const amps = Math.min(stringAmps(string, highestVolts), highestVolts * conductance);
   return Number.isFinite(amps) ? amps : noSolution('load', 'nothing limits the current of its LEDs');
 }
@@ -107,15 +141,24 @@ function startAmps(string: SeriesString, { pieceOhms, joints, highestVolts }: Ta
  */
 function ledStrings(
   ladder: TapeLadder,
-  string: SeriesString,
-  start: number,
-  cuts: number,
-  volts: number,
+  strings: readonly (SeriesString | null)[],
+  circuit: TapeCircuit,
 ): Loads {
-  const slopeVolts = string.junctions[0]?.slopeVolts ?? 1;
-  const points = new Float64Array(cuts).fill(stringVolts(string, start));
-  const amps = new Float64Array(cuts).fill(start);
-  const slope = new Float64Array(cuts).fill(1 / stringSlopeOhms(string, start));
+  const { cuts, highestVolts: volts } = circuit;
+  const points = new Float64Array(cuts);
+  const amps = new Float64Array(cuts);
+  const slope = new Float64Array(cuts);
+  let slopeVolts = Infinity;
+  for (const string of new Set(strings)) {
+    if (!string) continue;
+    const start = startAmps(string, circuit);
+    const at = stringVolts(string, start);
+    const rise = 1 / stringSlopeOhms(string, start);
+    slopeVolts = Math.min(slopeVolts, string.junctions[0]?.slopeVolts ?? 1);
+    strings.forEach((own, k) => {
+      if (own === string) [points[k], amps[k], slope[k]] = [at, start, rise];
+    });
+  }
   const drawn = new Float64Array(cuts);
   // Volts are known to their last bits only.
   const settled = Math.max(SETTLED, (1e-14 * volts) / slopeVolts) * slopeVolts;
@@ -126,6 +169,8 @@ function ledStrings(
     ladder.solve(drawn, slope, volts);
     let furthest = 0;
     for (let k = 0; k < cuts; k++) {
+      const string = strings[k];
+      if (!string) continue;
       const solved = volts - (ladder.drops[k] ?? 0);
       const change = solved - (points[k] ?? 0);
       furthest = Math.max(furthest, Math.abs(change));
@@ -143,20 +188,23 @@ function ledStrings(
 }
 
 function loadsOf(input: TapeInput, circuit: TapeCircuit, ladder: TapeLadder): Loads {
-  const { load, cuts } = input;
+  const { load, cuts, segmentFaults: faults = [] } = input;
   const volts = circuit.highestVolts;
-  if (load.model === 'constant-current') return constantCurrents(ladder, cuts, load.amps, volts);
-  if (load.model === 'resistive') return resistances(ladder, cuts, load.ohms, volts);
-  const string: SeriesString = {
-    ohms: load.ballastOhms + load.leds * load.seriesOhms,
+  if (load.model === 'constant-current') return constantCurrents(ladder, cuts, load.amps, volts, faults);
+  if (load.model === 'resistive') return resistances(ladder, cuts, load.ohms, volts, faults);
+  const stringOf = (leds: number): SeriesString => ({
+    ohms: load.ballastOhms + leds * load.seriesOhms,
     junctions: [
       {
-        slopeVolts: load.leds * load.emissionCoefficient * thermalVolts(input.celsius ?? LED_CELSIUS),
+        slopeVolts: leds * load.emissionCoefficient * thermalVolts(input.celsius ?? LED_CELSIUS),
         saturationAmps: load.saturationAmps,
       },
     ],
-  };
-  return ledStrings(ladder, string, startAmps(string, circuit), cuts, volts);
+  });
+  const strings = new Array<SeriesString | null>(cuts).fill(stringOf(load.leds));
+  for (const { cut, shortedLeds } of faults)
+    strings[cut - 1] = shortedLeds === 'open' ? null : stringOf(load.leds - shortedLeds);
+  return ledStrings(ladder, strings, circuit);
 }
 
 /** Of conductors that zero ohms tie together each carries the same. */
@@ -165,14 +213,25 @@ function sharedOut(
   amps: Float64Array,
   tie: 'positiveTie' | 'negativeTie',
 ): number[] {
-  const owners = joints.map((joint, i) => (joint[tie] < 0 ? i : joint[tie]));
+  const owners = joints.map((joint, i) => (isFeed(joint) && joint[tie] >= 0 ? joint[tie] : i));
   const members = new Map<number, number>();
   for (const owner of owners) members.set(owner, (members.get(owner) ?? 0) + 1);
-  const shares = new Array<number>(joints.length).fill(0);
+  const shares: number[] = [];
   owners.forEach((owner, i) => {
-    shares[joints[i]?.index ?? 0] = (amps[owner] ?? 0) / (members.get(owner) ?? 1);
+    const joint = joints[i];
+    if (joint && isFeed(joint)) shares[joint.index] = (amps[owner] ?? 0) / (members.get(owner) ?? 1);
   });
   return shares;
+}
+
+function jointAmps({ joints = [] }: TapeInput, circuit: TapeCircuit, ladder: TapeLadder): number[] {
+  const amps: number[] = [];
+  circuit.joints.forEach((joint, i) => {
+    if (isFeed(joint)) return;
+    const through = joints[joint.index]?.rail === 'negative' ? ladder.negativeAmps : ladder.positiveAmps;
+    amps[joint.index] = through[i] ?? 0;
+  });
+  return amps;
 }
 
 /**
@@ -184,7 +243,7 @@ function sharedOut(
  */
 export function operatingPoint(input: TapeInput): OperatingPoint {
   const sources = sourcesOf(input.feeds, input.sourceOhms);
-  const circuit = tapeCircuit(input.feeds, sources, input);
+  const circuit = tapeCircuit(input.feeds, sources, input, input.joints);
   const ladder = new TapeLadder(circuit);
   const loads = loadsOf(input, circuit, ladder);
   const sourceOfFeed = new Array<number>(input.feeds.length).fill(0);
@@ -198,5 +257,6 @@ export function operatingPoint(input: TapeInput): OperatingPoint {
     loadVolts: loads.volts,
     loadDrops: loads.drops,
     loadAmps: loads.amps,
+    jointAmps: jointAmps(input, circuit, ladder),
   };
 }

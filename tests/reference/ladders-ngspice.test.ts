@@ -38,6 +38,18 @@ function randomFeeds(random: Random, cuts: number, volts: number): TapeFeed[] {
   });
 }
 
+/** Bad joints, one at a boundary and rail at most; now and then none at all, or one that is good. */
+function randomJoints(random: Random, cuts: number) {
+  const places = new Set(
+    Array.from({ length: random.whole(0, 3) }, () => random.whole(1, Math.max(1, cuts - 1))),
+  );
+  return [...places].map((at) => ({
+    at,
+    rail: random.pick(['positive', 'negative'] as const),
+    ohms: random.chance(0.2) ? 0 : random.decades(0.01, 20),
+  }));
+}
+
 function randomTape(random: Random): TapeInput {
   const cuts = random.whole(1, 60);
   const volts = random.pick([5, 12, 24, 48]);
@@ -49,6 +61,7 @@ function randomTape(random: Random): TapeInput {
     feeds: randomFeeds(random, cuts, volts),
     ...(random.chance(0.5) ? { sourceOhms: random.decades(1e-3, 0.5) } : {}),
     celsius: random.between(-20, 90),
+    ...(cuts > 1 && random.chance(0.5) ? { joints: randomJoints(random, cuts) } : {}),
   };
 }
 

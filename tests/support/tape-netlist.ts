@@ -25,9 +25,17 @@ export function netlistOf(input: TapeInput): string[] {
     n: (railOhmsPerMetre.negative * cutMetres) / 2,
   };
   const lines = [`.options temp=${celsius}`];
+  const joints = input.joints ?? [];
+  joints.forEach(({ at, rail, ohms }, j) => {
+    const [node] = rail;
+    lines.push(wire(`j${j}`, `${node}b${at}`, `${node}j${at}`, ohms));
+  });
+  /** Where the cut after boundary k begins: behind the bad joint, if there is one. */
+  const begins = (rail: 'p' | 'n', k: number) =>
+    joints.some((joint) => joint.at === k && joint.rail.startsWith(rail)) ? `${rail}j${k}` : `${rail}b${k}`;
   for (let k = 1; k <= cuts; k++) {
     for (const rail of ['p', 'n'] as const) {
-      lines.push(`R${rail}a${k} ${rail}b${k - 1} ${rail}${k} ${half[rail]}`);
+      lines.push(`R${rail}a${k} ${begins(rail, k - 1)} ${rail}${k} ${half[rail]}`);
       lines.push(`R${rail}b${k} ${rail}${k} ${rail}b${k} ${half[rail]}`);
     }
     lines.push(`Vm${k} p${k} q${k} DC 0`, ...loadLines(input, k));

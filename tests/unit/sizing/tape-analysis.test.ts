@@ -57,6 +57,27 @@ describe('the ladder by hand', () => {
     });
   });
 
+  it.each(['positive', 'negative'] as const)('puts a bad joint in the %s rail between two cuts', (rail) => {
+    const change = {
+      cuts: 3,
+      cutMetres: 1,
+      load: { model: 'constant-current', amps: 1 },
+      joints: [{ at: 2, rail, ohms: 0.5 }],
+    } as const;
+    const rails = { railOhmsPerMetre: { positive: 0, negative: 0 } };
+    const ends = [
+      { at: 0, volts: 10, positiveOhms: 0, negativeOhms: 0 },
+      { at: 3, volts: 10, positiveOhms: 0, negativeOhms: 0 },
+    ];
+    // Fed at the start, the joint carries the last cut's 1 A; fed at the end, the first two cuts' 2 A.
+    expect(solve({ ...change, ...rails, feeds: ends.slice(0, 1) }).result.loadVolts).toEqual([10, 10, 9.5]);
+    expect(solve({ ...change, ...rails, feeds: ends.slice(1) }).result.loadVolts).toEqual([9, 9, 10]);
+    // Fed at both ends without resistance, nothing has to flow through it.
+    expect(solve({ ...change, ...rails, feeds: ends }).result.loadVolts).toEqual([10, 10, 10]);
+    expect(refused({ ...change, joints: [{ at: 3, rail, ohms: 1 }] })).toBe('invalid-input joints.0.at');
+    expect(refused({ ...change, joints: [{ at: 0, rail, ohms: 1 }] })).toBe('invalid-input joints.0.at');
+  });
+
   it('keeps positive and negative conductors apart: fed at one end, returned at the other', () => {
     const { result } = solve({
       cuts: 2,
