@@ -1,4 +1,4 @@
-import { KeyFigure, Sheet } from '@/components/ui/sheet';
+import { KeyFigure, Notice, Sheet } from '@/components/ui/sheet';
 import { balanceOf, type InvoiceRow, invoiceState } from '@/lib/invoices/schema';
 import { formatDate, formatMoney } from '@/lib/units';
 import type { ShopSettings } from '@/lib/units/settings';
@@ -82,9 +82,19 @@ export function InvoiceCard({
         />
       </dl>
       <InvoiceEvents events={events} settings={settings} />
-      {balance > 0n ? (
+      {invoice.voided && payments.length > 0 ? (
+        <Notice
+          kind="danger"
+          word="Void, and paid"
+          title="Money came for this invoice after it was voided."
+          role="status"
+        >
+          Give it back at your card service, or agree with the customer what it pays for.
+        </Notice>
+      ) : null}
+      {invoice.voided ? null : (
         <div className="mt-4 flex flex-col gap-3">
-          {may.record ? (
+          {may.record && balance > 0n ? (
             <RecordPayment
               shopId={shopId}
               invoiceId={invoice.id}
@@ -97,7 +107,7 @@ export function InvoiceCard({
             <VoidInvoice shopId={shopId} invoiceId={invoice.id} number={invoice.number} />
           ) : null}
         </div>
-      ) : null}
+      )}
     </Sheet>
   );
 }

@@ -73,6 +73,7 @@ export const PLACES: Readonly<Record<string, Access>> = {
 export const ACTIONS: Readonly<Record<string, Access>> = {
   'lib/customers/actions.ts#saveCustomer': 'customer:edit',
   'lib/invoices/actions.ts#issueFinal': 'invoice:edit',
+  'lib/invoices/actions.ts#issueDeposit': 'invoice:edit',
   'lib/invoices/actions.ts#voidOne': 'payment:refund',
   'lib/payments/actions.ts#recordPayment': 'payment:record',
   'lib/jobs/actions.ts#createJob': 'job:open',

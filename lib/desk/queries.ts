@@ -22,6 +22,7 @@ const MOVES: Record<WaitKey, { needs: Parameters<typeof may>[1]; path: string; a
   'quote-not-sent': { needs: 'quote:send', path: 'quote', action: 'Send the quote' },
   // The customer's move: nothing waits for anybody here.
   'quote-waits-for-answer': null,
+  'deposit-not-invoiced': { needs: 'invoice:edit', path: 'money', action: 'Send the deposit invoice' },
   'deposit-open': { needs: 'invoice:edit', path: 'money', action: 'Look at the deposit' },
   'no-visit-yet': { needs: 'visit:edit', path: 'install', action: 'Plan a visit' },
   'sheet-not-released': { needs: 'sheet:release', path: 'install', action: 'Release the sheet' },

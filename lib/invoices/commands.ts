@@ -1,6 +1,6 @@
 /** Issuing and voiding invoices. A deposit is an invoice; numbers come from one counter row per shop. */
 import { addDays, format } from 'date-fns';
-import { type AnyActor, command, systemActor } from '@/lib/access/command';
+import { type AnyActor, command, type CommandContext, systemActor } from '@/lib/access/command';
 import { freezeDocument, recordDocumentEvent } from '@/lib/documents/commands';
 import { refreshStage } from '@/lib/jobs/commands';
 import { getJob, type JobWithSteps } from '@/lib/jobs/queries';
@@ -12,11 +12,12 @@ import { AppError } from '@/lib/platform/http/errors';
 import { enqueue } from '@/lib/platform/queue/outbox';
 import type { Accepted } from '@/lib/quotes/schema/accepted';
 import { contentOf } from '@/lib/quotes/queries';
+import type { QuoteContent } from '@/lib/quotes/schema/content';
 import { totalsOf } from '@/lib/quotes/schema/totals';
 import { getShop, settingsOf } from '@/lib/shops/queries';
 import { dayIn } from '@/lib/units';
 import { invoicesOfJob, lockInvoice } from './queries';
-import { type InvoiceContent, type IssueFinalInput, type VoidInput } from './schema';
+import { type InvoiceContent, type IssueInput, type VoidInput } from './schema';
 
 const DEPOSIT_DUE_DAYS = 7;
 
@@ -112,6 +113,27 @@ async function freeze(
   return { id, number };
 }
 
+function depositPart(quote: QuoteContent, depositMinor: number, dueInDays: number): Part {
+  const text = message('invoice.row.deposit', {
+    pct: quote.terms.depositPct,
+    number: quote.number,
+    revision: quote.revision,
+  });
+  const rows = [{ text, amountMinor: depositMinor }];
+  return { purpose: 'deposit', dueInDays, taxMinor: 0, totalMinor: depositMinor, rows };
+}
+
+const issuedAudit = (
+  audit: CommandContext['audit'],
+  invoice: { id: string; number: string },
+  purpose: InvoiceContent['purpose'],
+) =>
+  audit(
+    'invoice.issued',
+    { type: 'document', id: invoice.id },
+    { after: { number: invoice.number, purpose } },
+  );
+
 /** Hook of an acceptance, in its transaction: the deposit is asked for at once, where the job's rule asks for one. */
 export async function issueDepositInvoice(accepted: Accepted): Promise<void> {
   const job = await getJob(accepted.jobId);
@@ -119,23 +141,40 @@ export async function issueDepositInvoice(accepted: Accepted): Promise<void> {
   const quote = await contentOf(accepted.documentId);
   const email = await quotedTo(accepted.documentId, quote.customer.email);
   await command(systemActor(currentShopId(), 'acceptance'), async ({ audit }) => {
-    const text = message('invoice.row.deposit', {
-      pct: quote.terms.depositPct,
-      number: quote.number,
-      revision: quote.revision,
-    });
-    const invoice = await freeze(job, email, null, {
-      purpose: 'deposit',
-      dueInDays: DEPOSIT_DUE_DAYS,
-      taxMinor: 0,
-      totalMinor: accepted.depositMinor,
-      rows: [{ text, amountMinor: accepted.depositMinor }],
-    });
-    await audit(
-      'invoice.issued',
-      { type: 'document', id: invoice.id },
-      { after: { number: invoice.number, purpose: 'deposit' } },
-    );
+    const part = depositPart(quote, accepted.depositMinor, DEPOSIT_DUE_DAYS);
+    await issuedAudit(audit, await freeze(job, email, null, part), 'deposit');
+  });
+}
+
+/** The job under its lock, with its invoices that are not void: two presses in two tabs follow one another here. */
+async function lockedJob(jobId: string) {
+  await run('select id from jobs where id = $1 for update', [jobId]);
+  const job = await getJob(jobId);
+  return { job, invoices: (await invoicesOfJob(job.id)).filter((invoice) => !invoice.voided) };
+}
+
+/** The deposit once more, after its invoice was voided: a void takes back the paper, not what was agreed. */
+export async function issueDepositAgain(
+  actor: AnyActor,
+  input: IssueInput,
+): Promise<{ id: string; number: string }> {
+  return command(actor, async ({ audit }) => {
+    const { job, invoices } = await lockedJob(input.jobId);
+    if (invoices.length > 0)
+      throw new AppError(
+        'conflict',
+        'An invoice of this job is out already. Void it before you send another.',
+      );
+    const accepted = await acceptedQuote(job.id);
+    const quote = await contentOf(accepted.documentId);
+    const { depositMinor } = totalsOf(quote, accepted.choices);
+    if (depositMinor <= 0 || job.depositRule !== 'percent')
+      throw new AppError('conflict', 'No deposit was agreed for this job.');
+    const part = depositPart(quote, depositMinor, input.dueInDays);
+    const invoice = await freeze(job, input.email, actor.membershipId, part);
+    await issuedAudit(audit, invoice, 'deposit');
+    await refreshStage(job.id);
+    return invoice;
   });
 }
 
@@ -151,13 +190,10 @@ async function quotedTo(documentId: string, fallback: string): Promise<string> {
 /** The rest of the accepted total, once the work is signed off. */
 export async function issueFinalInvoice(
   actor: AnyActor,
-  input: IssueFinalInput,
+  input: IssueInput,
 ): Promise<{ id: string; number: string }> {
   return command(actor, async ({ audit }) => {
-    // Two presses in two tabs: the second waits here, and then finds the first one's invoice.
-    await run('select id from jobs where id = $1 for update', [input.jobId]);
-    const job = await getJob(input.jobId);
-    const invoices = (await invoicesOfJob(job.id)).filter((invoice) => !invoice.voided);
+    const { job, invoices } = await lockedJob(input.jobId);
     if (invoices.some((invoice) => invoice.purpose === 'final'))
       throw new AppError('conflict', 'The final invoice is out already. Void it before you send another.');
     const accepted = await acceptedQuote(job.id);
@@ -183,11 +219,7 @@ export async function issueFinalInvoice(
       totalMinor,
       rows: [work, ...(totals.taxMinor > 0 ? [tax] : []), ...earlier],
     });
-    await audit(
-      'invoice.issued',
-      { type: 'document', id: invoice.id },
-      { after: { number: invoice.number, purpose: 'final' } },
-    );
+    await issuedAudit(audit, invoice, 'final');
     await refreshStage(job.id);
     return invoice;
   });

@@ -50,7 +50,8 @@ export function invoiceState(invoice: InvoiceRow, today: string): InvoiceState {
   return BigInt(invoice.receivedMinor) > 0n ? 'part paid' : 'open';
 }
 
-export const issueFinalForm = z.object({
+/** An invoice that the office sends: the final one, or a deposit anew after a void. */
+export const issueForm = z.object({
   jobId: z.uuid(),
   email: z.email('This is not an e-mail address.'),
   dueInDays: z.coerce
@@ -59,8 +60,8 @@ export const issueFinalForm = z.object({
     .min(0, 'not before today')
     .max(120, 'at most 120'),
 });
-export type IssueFinalForm = z.input<typeof issueFinalForm>;
-export type IssueFinalInput = z.output<typeof issueFinalForm>;
+export type IssueForm = z.input<typeof issueForm>;
+export type IssueInput = z.output<typeof issueForm>;
 
 export const voidForm = z.object({
   invoiceId: z.uuid(),

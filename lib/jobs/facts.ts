@@ -37,6 +37,8 @@ const FACTS = `
     coalesce((select sent from quotes q where q.job_id = w.id), false) as "quoteSent",
     exists (select 1 from accepted a where a.job_id = w.id) as "accepted",
     w.deposit_rule as "depositRule",
+    exists (select 1 from documents d where d.job_id = w.id and d.kind = 'invoice'
+      and d.canonical::jsonb ->> 'purpose' = 'deposit') as "depositAsked",
     exists (select 1 from invoices i where i.job_id = w.id and i.purpose = 'deposit') as "depositInvoiced",
     coalesce((select bool_and(i.received >= i.amount_minor) from invoices i
       where i.job_id = w.id and i.purpose = 'deposit'), false) as "depositPaid",

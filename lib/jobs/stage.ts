@@ -10,6 +10,9 @@ export interface JobFacts {
   accepted: boolean;
   /** `none` and `terms` are paths of their own: the step counts as done. */
   depositRule: 'percent' | 'none' | 'terms';
+  /** A deposit invoice was issued, void or not: voiding it does not waive the deposit, only the job's rule does. */
+  depositAsked: boolean;
+  /** One that is not void. */
   depositInvoiced: boolean;
   depositPaid: boolean;
   visitPlanned: boolean;
@@ -23,7 +26,7 @@ export interface JobFacts {
 export type Stage = 'survey' | 'quote' | 'install' | 'closeout' | 'closed';
 
 export const depositDone = (facts: JobFacts): boolean =>
-  facts.accepted && (facts.depositRule !== 'percent' || !facts.depositInvoiced || facts.depositPaid);
+  facts.accepted && (facts.depositRule !== 'percent' || !facts.depositAsked || facts.depositPaid);
 
 export function stageOf(facts: JobFacts): Stage {
   if (facts.closed) return 'closed';
@@ -47,6 +50,7 @@ export type WaitKey =
   | 'stops-to-clear'
   | 'quote-not-sent'
   | 'quote-waits-for-answer'
+  | 'deposit-not-invoiced'
   | 'deposit-open'
   | 'no-visit-yet'
   | 'sheet-not-released'
@@ -63,7 +67,7 @@ function waitOf(key: StepKey, facts: JobFacts): WaitKey {
       if (facts.openStops > 0) return 'stops-to-clear';
       return facts.quoteSent ? 'quote-waits-for-answer' : 'quote-not-sent';
     case 'deposit':
-      return 'deposit-open';
+      return facts.depositInvoiced ? 'deposit-open' : 'deposit-not-invoiced';
     case 'install':
       if (!facts.visitPlanned) return 'no-visit-yet';
       return facts.sheetReleased ? 'sheet-not-signed-off' : 'sheet-not-released';

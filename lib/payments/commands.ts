@@ -230,7 +230,11 @@ async function recordCardPayment(
     ],
   );
   const [payment] = inserted;
-  if (payment) await enqueue('payment.receipt', { paymentId: payment.id });
+  if (!payment) return;
+  await enqueue('payment.receipt', { paymentId: payment.id });
+  // It was paid in the moment in which it was voided: the money is here, and somebody must say what becomes of it.
+  if ((await getInvoice(session.invoiceId)).voided)
+    await enqueue('payment.on-void', { paymentId: payment.id });
 }
 
 /** Brings our session to what the service says of it, in one transaction. @returns its state */

@@ -1,12 +1,14 @@
 /** Receipts: one for each payment. */
 import { render } from '@react-email/render';
 import { createElement } from 'react';
+import { PaidOnVoidMail } from '@/emails/paid-on-void';
 import { ReceiptMail } from '@/emails/receipt';
 import { getInvoice, invoiceContent, linkOfInvoice } from '@/lib/invoices/queries';
 import { balanceOf } from '@/lib/invoices/schema';
 import { linkUrl } from '@/lib/links/queries';
 import { message } from '@/lib/messages';
 import { select, withShop } from '@/lib/platform/db';
+import { env } from '@/lib/platform/env';
 import { notFound } from '@/lib/platform/http/errors';
 import { sendMail } from '@/lib/platform/mail';
 import type { Handler } from '@/lib/platform/queue/worker';
@@ -60,9 +62,30 @@ const receipt: Handler = async (item) => {
   });
 };
 
+const onVoid: Handler = async (item) => {
+  const { paid, invoice, content } = await load(item.shopId, item.payload['paymentId'] ?? '');
+  if (!content.shop.email) return;
+  const amount = formatMoney(paid.amountMinor, content.settings);
+  const body = createElement(PaidOnVoidMail, {
+    content,
+    amount,
+    customer: content.customer.name,
+    link: `${env().APP_URL.replace(/\/$/, '')}/s/${item.shopId}/jobs/${invoice.jobId}/money`,
+  });
+  await sendMail({
+    id: item.id,
+    to: content.shop.email,
+    fromName: content.shop.name,
+    subject: message('mail.paid-on-void.subject', { amount, number: content.number }),
+    html: await render(body),
+    text: await render(body, { plainText: true }),
+  });
+};
+
 const closePages: Handler = (item) => closePagesOf(item.shopId, item.payload['invoiceId'] ?? '');
 
 export const paymentHandlers: [string, Handler][] = [
   ['payment.receipt', receipt],
+  ['payment.on-void', onVoid],
   ['payment.close-pages', closePages],
 ];

@@ -3,12 +3,14 @@ import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { command } from '@/lib/access/command';
 import { freezeDocument } from '@/lib/documents/commands';
 import { canonicalOf, eventsOf, pdfOf } from '@/lib/documents/queries';
-import { issueFinalInvoice, voidInvoice } from '@/lib/invoices/commands';
+import { issueDepositAgain, issueFinalInvoice, voidInvoice } from '@/lib/invoices/commands';
 import { invoiceHandlers } from '@/lib/invoices/jobs';
 import { getInvoice, invoicesOfJob } from '@/lib/invoices/queries';
 import { balanceOf, type InvoiceContent } from '@/lib/invoices/schema';
+import { setDepositRule } from '@/lib/jobs/commands';
 import { getJob } from '@/lib/jobs/queries';
-import { recordPayment, startCheckout } from '@/lib/payments/commands';
+import { depositDone } from '@/lib/jobs/stage';
+import { recordPayment, settle, startCheckout } from '@/lib/payments/commands';
 import { paymentHandlers } from '@/lib/payments/jobs';
 import { closeDatabase, run, select, withShop } from '@/lib/platform/db';
 import { nextNumber } from '@/lib/platform/db/counter';
@@ -17,6 +19,7 @@ import { getFile } from '@/lib/platform/storage';
 import { paymentService } from '@/lib/platform/stripe';
 import type { OutboxItem } from '@/lib/platform/queue/worker';
 import { acceptedJob } from '../support/accepted-job';
+import { arrived } from '../support/caught-mail';
 import { makeShop, type TestShop } from '../support/shop';
 
 const EMAIL = 'customer@example.com';
@@ -31,6 +34,7 @@ afterAll(closeDatabase);
 const inShop = <T>(work: () => Promise<T>, of = shop) => withShop(of.shopId, work);
 const final = (jobId: string) =>
   issueFinalInvoice(shop.actors.office, { jobId, email: EMAIL, dueInDays: 14 });
+const again = (jobId: string) => issueDepositAgain(shop.actors.office, { jobId, email: EMAIL, dueInDays: 7 });
 const depositOf = async (jobId: string) => (await inShop(() => invoicesOfJob(jobId)))[0]!;
 const done = (results: PromiseSettledResult<unknown>[]) =>
   results.filter((result) => result.status === 'fulfilled').length;
@@ -120,6 +124,75 @@ describe('what is open', () => {
     expect(await stateOf(page)).toBe('expired');
     await expect(startCheckout(shop.shopId, jobId, id, EMAIL)).rejects.toMatchObject({ code: 'conflict' });
     await expect(byHand(id, '1.00')).rejects.toMatchObject({ code: 'conflict' });
+  });
+
+  it('stays owed when its invoice is voided, until it is sent and paid anew or the rule is changed', async () => {
+    const { jobId, depositMinor } = await acceptedJob(shop);
+    const { id } = await depositOf(jobId);
+    const stage = async () => {
+      const { facts, steps } = await inShop(() => getJob(jobId));
+      return { done: depositDone(facts), waits: steps.find(({ state }) => state === 'open')?.waitsFor };
+    };
+    await expect(again(jobId)).rejects.toMatchObject({ code: 'conflict' });
+    await voidInvoice(shop.actors.owner, { invoiceId: id, reason: 'Wrong address' });
+    expect(await stage()).toEqual({ done: false, waits: 'deposit-not-invoiced' });
+    // Two presses in two tabs make one.
+    expect(done(await Promise.allSettled([again(jobId), again(jobId)]))).toBe(1);
+    const live = (await inShop(() => invoicesOfJob(jobId))).filter((invoice) => !invoice.voided);
+    expect(live).toMatchObject([{ purpose: 'deposit', amountMinor: String(depositMinor) }]);
+    expect(await stage()).toEqual({ done: false, waits: 'deposit-open' });
+    await byHand(live[0]!.id, (depositMinor / 100).toFixed(2));
+    expect((await stage()).done).toBe(true);
+
+    const other = await acceptedJob(shop);
+    await voidInvoice(shop.actors.owner, {
+      invoiceId: (await depositOf(other.jobId)).id,
+      reason: 'On terms now',
+    });
+    await setDepositRule(shop.actors.owner, { jobId: other.jobId, rule: 'terms' });
+    expect(depositDone((await inShop(() => getJob(other.jobId))).facts)).toBe(true);
+    await expect(again(other.jobId)).rejects.toMatchObject({ code: 'conflict' });
+  });
+
+  it('is recorded and told to the office when a card page settles after the void', async () => {
+    const { jobId, depositMinor } = await acceptedJob(shop);
+    const { id } = await depositOf(jobId);
+    const page = await openPage(jobId, id);
+    await voidInvoice(shop.actors.owner, { invoiceId: id, reason: 'Wrong customer' });
+    // The card was charged in that very moment: the page that is to be closed says paid.
+    const rows = await inShop(() =>
+      select<{ id: string; amount: string }>(
+        'select id, amount_minor::text as amount from payment_sessions where checkout_id = $1',
+        [page],
+      ),
+    );
+    const state = await settle(shop.shopId, rows[0]!.id, {
+      id: page,
+      state: 'paid',
+      url: null,
+      amountMinor: Number(rows[0]!.amount),
+      currency: 'USD',
+      paymentIntentId: `pi_${page}`,
+      metadata: { paymentSessionId: rows[0]!.id },
+      expiresAt: new Date(),
+    });
+    expect(state).toBe('paid');
+    const invoice = await inShop(() => getInvoice(id));
+    expect(invoice).toMatchObject({ voided: true, receivedMinor: String(depositMinor) });
+    expect(balanceOf(invoice)).toBe(0n);
+    const told = await inShop(() =>
+      select<Omit<OutboxItem, 'shopId'>>(
+        `select o.id, o.kind, o.payload from outbox o join payments p on p.id::text = o.payload ->> 'paymentId'
+         where o.kind = 'payment.on-void' and p.invoice_id = $1`,
+        [id],
+      ),
+    );
+    expect(told).toHaveLength(1);
+    await handlers.get('payment.on-void')!({ ...told[0]!, shopId: shop.shopId });
+    const mail = await arrived(told[0]!.id);
+    expect(mail.subject).toMatch(/which is void$/);
+    expect(mail.to[0]?.address).toMatch(/^office-/);
+    expect(mail.text).toContain('Give it back at your card service');
   });
 
   it('closes the card page of the whole when a part comes by hand; the next page asks for the rest', async () => {

@@ -9,6 +9,7 @@ import { handleNotice, recordPayment, settle, settleReturn, startCheckout } from
 import { closeDatabase, run, select, withShop } from '@/lib/platform/db';
 import { type Checkout, paymentService, type PaymentNotice } from '@/lib/platform/stripe';
 import { type AcceptedJob, acceptedJob } from '../support/accepted-job';
+import { seeded, testSeed } from '../support/random';
 import { makeShop, type TestShop } from '../support/shop';
 
 let shop: TestShop;
@@ -101,9 +102,9 @@ describe('the deposit', () => {
       paymentIntentId: null,
       metadata: { paymentSessionId: session.id },
     });
-    const deliveries = Array.from({ length: 20 }, (_, index) => notice(index % 4)).sort(
-      () => 0.5 - Math.random(),
-    );
+    const seed = testSeed();
+    console.log(`order of the notices: TEST_SEED=${seed}`);
+    const deliveries = seeded(seed).shuffled(Array.from({ length: 20 }, (_, index) => notice(index % 4)));
     await Promise.all(deliveries.map((one) => settle(shop.shopId, session.id, paid(session), one)));
     // A late notice of an earlier state changes nothing.
     await settle(shop.shopId, session.id, paid(session, { state: 'open' }), notice(99));

@@ -9,6 +9,7 @@ import { totalsOf } from '@/lib/quotes/schema/totals';
 import { closeDatabase, withShop } from '@/lib/platform/db';
 import { sha256 } from '@/lib/platform/http/hash';
 import type { OutboxItem } from '@/lib/platform/queue/worker';
+import { arrived, catcher, type Mail } from '../support/caught-mail';
 import { asMigrator, draftedJob, FakeSources, type QuoteShop, quoteShop, sendAsIs } from '../support/quotes';
 
 let shop: QuoteShop;
@@ -16,19 +17,6 @@ beforeAll(async () => {
   shop = await quoteShop();
 });
 afterAll(closeDatabase);
-
-interface Mail {
-  headers: Record<string, string>;
-  subject: string;
-  html: string;
-  text: string;
-  from: { address: string; name: string }[];
-  to: { address: string }[];
-  attachments?: { generatedFileName: string; filename: string; contentType: string }[];
-  id: string;
-}
-
-const catcher = () => process.env.MAIL_CATCHER_URL ?? '';
 
 /** Runs what the outbox holds of this document, and reads what the catcher got for each. */
 async function deliver(documentId: string): Promise<Mail[]> {
@@ -43,13 +31,6 @@ async function deliver(documentId: string): Promise<Mail[]> {
     mails.push(await arrived(item.id));
   }
   return mails;
-}
-
-async function arrived(outboxId: string): Promise<Mail> {
-  const all = (await (await fetch(`${catcher()}/api/email`)).json()) as Mail[];
-  const found = all.find((mail) => mail.headers['message-id']?.startsWith(`<${outboxId}@`));
-  if (!found) throw new Error(`No mail with the Message-ID of ${outboxId}.`);
-  return (await (await fetch(`${catcher()}/api/email/${found.id}`)).json()) as Mail;
 }
 
 async function sent() {

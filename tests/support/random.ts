@@ -15,6 +15,14 @@ export function seeded(seed: number) {
     decades: (low: number, high: number) => low * (high / low) ** next(),
     whole: (low: number, high: number) => low + Math.floor(next() * (high - low + 1)),
     pick: <T>(from: readonly [T, ...T[]]): T => from[Math.floor(next() * from.length)] ?? from[0],
+    shuffled: <T>(from: readonly T[]): T[] => {
+      const out = [...from];
+      for (let i = out.length - 1; i > 0; i--) {
+        const j = Math.floor(next() * (i + 1));
+        [out[i], out[j]] = [out[j] as T, out[i] as T];
+      }
+      return out;
+    },
     chance: (share: number) => next() < share,
   };
 }

@@ -10,6 +10,7 @@ export const jobs = {
   'job.wait.stops-to-clear': 'stops to clear',
   'job.wait.quote-not-sent': 'quote not sent',
   'job.wait.quote-waits-for-answer': 'waits for the customer',
+  'job.wait.deposit-not-invoiced': 'deposit invoice void',
   'job.wait.deposit-open': 'deposit not paid',
   'job.wait.no-visit-yet': 'no visit yet',
   'job.wait.sheet-not-released': 'wiring sheet not released',

@@ -27,6 +27,12 @@ export const money = {
   'mail.receipt.body': '{shop} received {amount} on {date} for invoice {number}, {title}. Thank you.',
   'mail.receipt.open': 'Still open on it: {balance}.',
   'mail.receipt.settled': 'The invoice is paid.',
+  'mail.paid-on-void.subject': '{amount} received for invoice {number}, which is void',
+  'mail.paid-on-void.body':
+    '{customer} paid {amount} by card for invoice {number} in the moment in which it was voided. The payment is recorded.',
+  'mail.paid-on-void.next':
+    'Give it back at your card service, or agree with the customer what it pays for. Nothing is done by itself.',
+  'mail.paid-on-void.button': 'Open the money page',
   'pay.paid.title': 'Paid. Thank you.',
   'pay.paid.text': 'Your payment for invoice {number} has arrived. A receipt is on its way by mail.',
   'pay.pending.title': 'On its way',

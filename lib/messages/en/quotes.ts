@@ -90,6 +90,7 @@ export const quotes = {
   'customer.wait.stops-to-clear': 'the quote waits for your answer.',
   'customer.wait.quote-not-sent': 'the quote is being written.',
   'customer.wait.quote-waits-for-answer': 'the quote waits for your answer.',
+  'customer.wait.deposit-not-invoiced': 'a new deposit invoice is on its way.',
   'customer.wait.deposit-open': 'the deposit is to be paid.',
   'customer.wait.no-visit-yet': 'a date for the work is being found.',
   'customer.wait.sheet-not-released': 'the work is being prepared.',

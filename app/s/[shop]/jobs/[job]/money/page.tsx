@@ -2,8 +2,8 @@ import type { Metadata } from 'next';
 import { notFound } from 'next/navigation';
 import { JobLine } from '@/components/job-line/job-line';
 import { jobLineSteps } from '@/components/jobs/steps';
-import { FinalInvoiceForm } from '@/components/money/final-invoice-form';
 import { InvoiceCard } from '@/components/money/invoice-card';
+import { IssueInvoiceForm } from '@/components/money/issue-invoice-form';
 import { PageBody } from '@/components/shell/header';
 import { ButtonLink } from '@/components/ui/button';
 import { EmptyState, Sheet } from '@/components/ui/sheet';
@@ -24,6 +24,8 @@ export default async function MoneyPage({ params }: { params: Promise<{ shop: st
   });
   const { job, settings, invoices, payments, events, today } = money;
   const canIssue = may(actor, 'invoice:edit') && job.facts.accepted && !job.facts.finalInvoiced;
+  const { depositAsked, depositInvoiced, finalInvoiced } = job.facts;
+  const owesDeposit = depositAsked && !depositInvoiced && !finalInvoiced && job.depositRule === 'percent';
   return (
     <PageBody
       title={job.title}
@@ -59,12 +61,17 @@ export default async function MoneyPage({ params }: { params: Promise<{ shop: st
           />
         ))
       )}
+      {may(actor, 'invoice:edit') && owesDeposit ? (
+        <Sheet title="Deposit invoice">
+          <IssueInvoiceForm kind="deposit" shopId={shop} jobId={jobId} email={job.customerEmail} />
+        </Sheet>
+      ) : null}
       {canIssue ? (
         <Sheet title="Final invoice">
           {job.facts.sheetsSignedOff ? null : (
             <p className="mb-4">The wiring sheet is not signed off yet. You can still invoice now.</p>
           )}
-          <FinalInvoiceForm shopId={shop} jobId={jobId} email={job.customerEmail} />
+          <IssueInvoiceForm kind="final" shopId={shop} jobId={jobId} email={job.customerEmail} />
         </Sheet>
       ) : null}
     </PageBody>
