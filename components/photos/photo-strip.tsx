@@ -17,6 +17,9 @@ interface Said {
   bad: boolean;
 }
 
+/** Phones keep this kind for themselves; asked for JPEG, most of them hand over a JPEG. */
+const isHeic = (file: File) => /^image\/hei[cf]/.test(file.type) || /\.hei[cf]$/i.test(file.name);
+
 export function PhotoStrip({
   base,
   subject,
@@ -43,6 +46,13 @@ export function PhotoStrip({
   }, [load]);
   const add = async (file: File | undefined) => {
     if (!file) return;
+    if (isHeic(file)) {
+      setSaid({
+        text: `“${file.name}” is a HEIC picture. Set the camera to JPEG (“most compatible”), or save the picture as JPEG, and add that.`,
+        bad: true,
+      });
+      return;
+    }
     setSaid({ text: 'Sending the photo …', bad: false });
     const query = new URLSearchParams({ subjectType: subject.type, subjectId: subject.id });
     const response = await fetch(`${base}?${query}`, {
@@ -93,7 +103,7 @@ export function PhotoStrip({
         <input
           id={id}
           type="file"
-          accept="image/jpeg,image/png,image/webp,image/heic"
+          accept="image/jpeg,image/png,image/webp"
           capture="environment"
           className="sr-only"
           onChange={(event) => {

@@ -59,6 +59,13 @@ test('an area in depth', async ({ page, context }) => {
   await page.getByLabel('Plenum above').selectOption({ label: 'Yes' });
   await page.getByLabel('Reached by').selectOption({ label: 'Ladder' });
 
+  // A kind that can't be opened here is refused by name, before anything is sent.
+  await page
+    .getByLabel('Add a photo')
+    .last()
+    .setInputFiles({ name: 'IMG_7.HEIC', mimeType: 'image/heic', buffer: Buffer.from('ftypheic') });
+  await expect(page.getByText('“IMG_7.HEIC” is a HEIC picture.')).toBeVisible();
+
   await page.getByRole('button', { name: 'Add a reading' }).click();
   await page.getByLabel('Light', { exact: true }).fill('29');
   await page.getByLabel('Meter', { exact: true }).fill('Lux meter 7');
