@@ -6,7 +6,7 @@
  * from a linear program (tape-plan-prices.ts).
  */
 import type { Choices, Option } from './tape-plan-choices';
-import { type Kinds, worthByRoom } from './tape-plan-knapsack';
+import { type Kinds, Knapsack } from './tape-plan-knapsack';
 
 /** Price of a section by site and cuts. */
 export type Prices = readonly Float64Array[];
@@ -20,15 +20,23 @@ export interface Region {
   options: number[][];
 }
 
+/** Cheapest option of a run at the prices, and the spots of its sections. */
+export interface PricedRun {
+  cost: number;
+  option: number;
+  spots: number[];
+}
+
 export interface Bound {
   cost: number;
   prices: Prices;
-  /** Of each run its cheapest option at the prices. */
-  runCosts: number[];
-  /** Most that one channel of each bin is worth, and by the room left in it. */
+  runs: PricedRun[];
+  /** Of each site: most that one channel is worth by its room. */
   worth: Float64Array[];
   /** Of each bin: what one driver costs above the worth of its channels. */
   driverCosts: number[];
+  /** Of each site, for the loads. */
+  knapsacks: Knapsack[];
 }
 
 /** Kind that a section counts as: the largest that is not larger, or -1. */
@@ -87,32 +95,42 @@ export function grantedCost(
   return number === Infinity ? 0 : number * own;
 }
 
+function cheapestOption(options: readonly Option[], left: readonly number[], prices: Prices): PricedRun {
+  let best: PricedRun = { cost: Infinity, option: -1, spots: [] };
+  for (const option of left) {
+    const own = options[option];
+    const priced = own && pricedOption(own, prices);
+    if (priced && priced.cost < best.cost) best = { cost: priced.cost, option, spots: priced.chosen };
+  }
+  return best;
+}
+
+/** One knapsack a site, wide enough for its largest channel. */
+function knapsacksOf({ bins }: Choices, kinds: readonly Kinds[], prices: Prices): Knapsack[] {
+  return kinds.map((own, site) => {
+    const room = bins.reduce((most, bin) => (bin.site === site ? Math.max(most, bin.cuts) : most), 0);
+    return new Knapsack(room, own, (cuts) => prices[site]?.[cuts] ?? 0);
+  });
+}
+
 /**
  * The bound at these prices within a region. Prices are first lowered until no driver without a most number is worth
  * more than it costs.
  */
 export function boundOf(choices: Choices, kinds: readonly Kinds[], region: Region, prices: Prices): Bound {
-  const price = (site: number) => (kind: number) => prices[site]?.[kinds[site]?.cuts[kind] ?? 0] ?? 0;
-  const worth = choices.bins.map((bin) =>
-    worthByRoom(bin.cuts, kinds[bin.site] ?? { cuts: [], supply: [] }, price(bin.site)),
-  );
+  const knapsacks = knapsacksOf(choices, kinds, prices);
   let share = 1;
   choices.bins.forEach((bin, b) => {
-    const channels = bin.channels * (worth[b]?.[bin.cuts] ?? 0);
+    const channels = bin.channels * (knapsacks[bin.site]?.worth[bin.cuts] ?? 0);
     if (region.most[b] === Infinity && channels * share > bin.cost) share = bin.cost / channels;
   });
   const scaled = share < 1 ? prices.map((own) => own.map((one) => one * share)) : prices;
-  if (share < 1) for (const own of worth) own.forEach((one, room) => (own[room] = one * share));
-  const runCosts = choices.runs.map(({ options }, r) =>
-    (region.options[r] ?? []).reduce((least, o) => {
-      const option = options[o];
-      return option ? Math.min(least, pricedOption(option, scaled).cost) : least;
-    }, Infinity),
-  );
-  const driverCosts = choices.bins.map((bin, b) => bin.cost - bin.channels * (worth[b]?.[bin.cuts] ?? 0));
-  const found = { cost: 0, prices: scaled, runCosts, worth, driverCosts };
+  const worth = knapsacks.map((own) => (share < 1 ? own.worth.map((one) => one * share) : own.worth));
+  const runs = choices.runs.map(({ options }, r) => cheapestOption(options, region.options[r] ?? [], scaled));
+  const driverCosts = choices.bins.map((bin) => bin.cost - bin.channels * (worth[bin.site]?.[bin.cuts] ?? 0));
+  const found = { cost: 0, prices: scaled, runs, worth, driverCosts, knapsacks };
   const drivers = choices.bins.reduce((sum, _, b) => sum + grantedCost(found, region, b), 0);
-  return { ...found, cost: runCosts.reduce((sum, own) => sum + own, drivers) };
+  return { ...found, cost: runs.reduce((sum, own) => sum + own.cost, drivers) };
 }
 
 /** Kinds of the sections that `wanted` keeps; supply counts all sections, each as its kind. */

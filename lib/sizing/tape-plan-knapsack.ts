@@ -22,50 +22,45 @@ function withKind(best: Float64Array, cuts: number, supply: number, price: numbe
   return next;
 }
 
-/** Tables after each kind that is worth anything and fits. */
-function tables(room: number, kinds: Kinds, price: (kind: number) => number) {
-  const found: Float64Array[] = [new Float64Array(room + 1)];
-  const used: number[] = [];
-  kinds.cuts.forEach((cuts, kind) => {
-    const own = price(kind);
-    if (own <= 0 || cuts > room) return;
-    used.push(kind);
-    found.push(withKind(found[found.length - 1] as Float64Array, cuts, kinds.supply[kind] ?? 0, own));
-  });
-  return { found, used };
-}
+/** What a channel at a site is worth by its room, and which load makes it so. */
+export class Knapsack {
+  /** Highest worth by room. */
+  readonly worth: Float64Array;
+  private readonly tables: Float64Array[];
+  /** Kind, cuts, most and price of each table after the first. */
+  private readonly used: { kind: number; cuts: number; supply: number; price: number }[] = [];
 
-/** Highest worth of a channel by its room, each kind of section at most as often as there can be one. */
-export function worthByRoom(room: number, kinds: Kinds, price: (kind: number) => number): Float64Array {
-  const { found } = tables(room, kinds, price);
-  return found[found.length - 1] as Float64Array;
-}
-
-/** The load of the highest worth. */
-export function fullestLoad(
-  room: number,
-  kinds: Kinds,
-  price: (kind: number) => number,
-): Load & { worth: number } {
-  const { found, used } = tables(room, kinds, price);
-  const load = { kinds: [] as number[], counts: [] as number[], worth: found[used.length]?.[room] ?? 0 };
-  let left = room;
-  for (let i = used.length - 1; i >= 0; i--) {
-    const kind = used[i] ?? 0;
-    const cuts = kinds.cuts[kind] ?? 1;
-    const worth = found[i + 1]?.[left] ?? 0;
-    const most = Math.min(kinds.supply[kind] ?? 0, Math.floor(left / cuts));
-    let n = 0;
-    // The tables hold the very sums that are compared here.
-    while (
-      n < most &&
-      (n === 0 ? (found[i]?.[left] ?? 0) : (found[i]?.[left - n * cuts] ?? 0) + n * price(kind)) < worth
-    )
-      n++;
-    if (n === 0) continue;
-    load.kinds.push(kind);
-    load.counts.push(n);
-    left -= n * cuts;
+  /** Each kind of section counts at most as often as there can be one. */
+  constructor(room: number, kinds: Kinds, price: (cuts: number) => number) {
+    let last = new Float64Array(room + 1) as Float64Array;
+    this.tables = [last];
+    kinds.cuts.forEach((cuts, kind) => {
+      const own = { kind, cuts, supply: kinds.supply[kind] ?? 0, price: price(cuts) };
+      if (own.price <= 0 || cuts > room) return;
+      last = withKind(last, cuts, own.supply, own.price);
+      this.used.push(own);
+      this.tables.push(last);
+    });
+    this.worth = last;
   }
-  return load;
+
+  /** The load of the highest worth in the room. */
+  load(room: number): Load {
+    const load: Load = { kinds: [], counts: [] };
+    let left = room;
+    for (let i = this.used.length - 1; i >= 0; i--) {
+      const { kind, cuts, supply, price } = this.used[i] ?? { kind: 0, cuts: 1, supply: 0, price: 0 };
+      const before = this.tables[i];
+      const worth = this.tables[i + 1]?.[left] ?? 0;
+      let n = (before?.[left] ?? 0) < worth ? 1 : 0;
+      if (n === 0) continue;
+      // The tables hold the very sums that are compared here.
+      const most = Math.min(supply, Math.floor(left / cuts));
+      while (n < most && (before?.[left - n * cuts] ?? 0) + n * price < worth) n++;
+      load.kinds.push(kind);
+      load.counts.push(n);
+      left -= n * cuts;
+    }
+    return load;
+  }
 }

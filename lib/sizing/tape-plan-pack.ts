@@ -1,22 +1,28 @@
 /**
- * Sections of one site into channels at least cost. Depth first: the largest section left goes into a channel, and
- * that channel is filled as far as anything fits (moving a section into room that is left never costs more, so fuller
- * loads suffice). Measured by the bound's prices, every channel wastes what it is worth less than it could be; a
- * branch ends when it wastes more than the budget, or reaches a state that was reached with less waste.
+ * Sections into channels at least cost. Depth first: the largest section left goes into a channel, and that channel is
+ * filled as far as anything fits that can be fed nowhere cheaper (moving it into room that is left never costs more,
+ * so fuller loads suffice). Measured by the bound's prices, every channel wastes what it is worth less than it could
+ * be; a branch ends when it wastes more than the budget, or reaches a state that was reached with less waste.
  */
 import { type Bound, grantedCost, type Region } from './tape-plan-bound';
 import type { Bin } from './tape-plan-choices';
 
+/** Sections that are alike to the packer: as long, and costing the same more or less to feed from each site. */
+export interface PackKind {
+  cuts: number;
+  count: number;
+  /** By site: what feeding it from there costs above its cheapest; undefined where it can't be. */
+  extra: readonly (number | undefined)[];
+}
+
 export interface PackJob {
   bins: readonly Bin[];
-  /** Bins of the site, by index. */
+  /** Bins that its sections can go to, by index. */
   own: readonly number[];
   region: Region;
   bound: Bound;
-  /** Cuts of each kind of section (descending), its price, and how many there are. */
-  cuts: readonly number[];
-  prices: readonly number[];
-  counts: readonly number[];
+  /** Longest first. */
+  kinds: readonly PackKind[];
   /** Loads tried for each channel, and steps in all. */
   width: number;
   steps: number;
@@ -29,14 +35,22 @@ export interface PackedChannel {
 }
 
 export interface Packing {
-  /** Of the drivers. */
+  /** Of the drivers, and of feeding sections from where it is not cheapest. */
   cost: number;
   channels: PackedChannel[];
+}
+
+export interface Packed {
+  best: Packing | null;
+  complete: boolean;
+  steps: number;
 }
 
 interface Fill {
   counts: number[];
   waste: number;
+  /** Feeding them from this site, above their cheapest. */
+  extra: number;
 }
 
 /** Rounding of worths. */
@@ -45,18 +59,29 @@ const TINY = 1e-12;
 class Packer {
   best: Packing | null = null;
   complete = true;
-  private steps = 0;
+  steps = 0;
   private readonly seen = new Map<string, number>();
   private readonly left: number[];
   private readonly free: number[];
   private readonly drivers: number[];
   private readonly channels: PackedChannel[] = [];
+  private extra = 0;
+  /** Of each kind: what the bound counts for a section, above the cheapest way to feed it. */
+  private readonly priced: number[];
 
   constructor(
     private readonly job: PackJob,
     private budget: number,
   ) {
-    this.left = [...job.counts];
+    this.left = job.kinds.map(({ count }) => count);
+    const { prices } = job.bound;
+    this.priced = job.kinds.map(({ cuts, extra }) =>
+      extra.reduce<number>(
+        (least, own, site) =>
+          own === undefined ? least : Math.min(least, own + (prices[site]?.[cuts] ?? 0)),
+        Infinity,
+      ),
+    );
     this.free = job.own.map(() => 0);
     this.drivers = job.own.map(() => 0);
   }
@@ -66,52 +91,62 @@ class Packer {
   }
 
   private worth(i: number): Float64Array {
-    return this.job.bound.worth[this.job.own[i] ?? 0] as Float64Array;
+    return this.job.bound.worth[this.bin(i).site] as Float64Array;
   }
 
-  /** Loads of a channel that hold one section of kind `first` and leave room for nothing that is left. */
+  /** Loads of a channel that hold one section of kind `first` and leave room for nothing that belongs there. */
   private fills(i: number, first: number, mostWaste: number): Fill[] {
-    const { cuts, prices, width } = this.job;
+    const { kinds, width } = this.job;
+    const { cuts: room, site } = this.bin(i);
     const worth = this.worth(i);
-    const room = this.bin(i).cuts;
     const full = worth[room] ?? 0;
-    const counts = cuts.map(() => 0);
+    const counts = kinds.map(() => 0);
     const found: Fill[] = [];
     let limit = mostWaste;
-    const keep = (waste: number) => {
-      found.push({ counts: [...counts], waste });
+    const keep = (value: number, extra: number) => {
+      found.push({ counts: [...counts], waste: full - value, extra });
       if (found.length <= width) return;
       found.sort((a, b) => a.waste - b.waste).pop();
       this.complete = false;
       limit = Math.min(limit, found[width - 1]?.waste ?? limit);
     };
-    const fill = (kind: number, left: number, value: number, skipped: number): void => {
+    /** `skipped`: the shortest section passed over that belongs here. */
+    const fill = (from: number, left: number, value: number, extra: number, skipped: number): void => {
       if (++this.steps > this.job.steps) {
         this.complete = false;
         if (found.length > 0 || this.spent()) return;
       }
       if (full - value - (worth[left] ?? 0) > limit + TINY * full) return;
-      let next = kind;
-      while (next < cuts.length && ((cuts[next] ?? 0) > left || (this.left[next] ?? 0) === 0)) next++;
-      if (next >= cuts.length) {
-        // Something was passed over that would still fit: not full.
-        if (skipped > left) keep(full - value);
+      let next = from;
+      while (next < kinds.length && !this.fits(next, site, left)) next++;
+      const kind = kinds[next];
+      if (!kind) {
+        if (skipped > left) keep(value, extra);
         return;
       }
-      const size = cuts[next] ?? 0;
-      const most = Math.min(this.left[next] ?? 0, Math.floor(left / size));
-      for (let n = most; n >= 0; n--) {
+      const own = kind.extra[site] ?? 0;
+      const waiting = this.left[next] ?? 0;
+      const each = (this.priced[next] ?? 0) - own;
+      for (let n = Math.min(waiting, Math.floor(left / kind.cuts)); n >= 0; n--) {
         counts[next] = (counts[next] ?? 0) + n;
-        const passed = n < (this.left[next] ?? 0) ? Math.min(skipped, size) : skipped;
-        fill(next + 1, left - n * size, value + n * (prices[next] ?? 0), passed);
+        const passed = n < waiting && own === 0 ? Math.min(skipped, kind.cuts) : skipped;
+        fill(next + 1, left - n * kind.cuts, value + n * each, extra + n * own, passed);
         counts[next] = (counts[next] ?? 0) - n;
       }
     };
+    const own = kinds[first]?.extra[site] ?? 0;
     counts[first] = 1;
     this.left[first] = (this.left[first] ?? 0) - 1;
-    fill(first, room - (cuts[first] ?? 0), prices[first] ?? 0, Infinity);
+    fill(first, room - (kinds[first]?.cuts ?? 0), (this.priced[first] ?? 0) - own, own, Infinity);
     this.left[first] = (this.left[first] ?? 0) + 1;
     return found.sort((a, b) => a.waste - b.waste);
+  }
+
+  private fits(k: number, site: number, room: number): boolean {
+    const kind = this.job.kinds[k];
+    return (
+      kind !== undefined && kind.cuts <= room && (this.left[k] ?? 0) > 0 && kind.extra[site] !== undefined
+    );
   }
 
   /** Without any packing the search goes on a little: the first one is worth most. */
@@ -119,15 +154,15 @@ class Packer {
     return this.steps > (this.best ? 1 : 4) * this.job.steps;
   }
 
-  /** What the bound counts for this site: the sections at their prices, and the drivers that it takes for granted. */
+  /** What the bound counts here: the sections at their prices, and the drivers that it takes for granted. */
   private counted(): number {
     const { job } = this;
-    const sections = job.counts.reduce((sum, own, kind) => sum + own * (job.prices[kind] ?? 0), 0);
+    const sections = job.kinds.reduce((sum, { count }, k) => sum + count * (this.priced[k] ?? 0), 0);
     return job.own.reduce((sum, b) => sum + grantedCost(job.bound, job.region, b), sections);
   }
 
   private finish(): void {
-    const cost = this.drivers.reduce((sum, own, i) => sum + own * this.bin(i).cost, 0);
+    const cost = this.drivers.reduce((sum, own, i) => sum + own * this.bin(i).cost, this.extra);
     const waste = cost - this.counted();
     if (waste >= this.budget) return;
     this.budget = waste;
@@ -138,11 +173,10 @@ class Packer {
   private idle(): number {
     let open = 0;
     for (let i = 0; i < this.free.length; i++) {
-      const own = this.worth(i);
-      open += (this.free[i] ?? 0) * (own[own.length - 1] ?? 0);
+      open += (this.free[i] ?? 0) * (this.worth(i)[this.bin(i).cuts] ?? 0);
     }
     if (open === 0) return 0;
-    const value = this.left.reduce((sum, own, kind) => sum + own * (this.job.prices[kind] ?? 0), 0);
+    const value = this.left.reduce((sum, own, kind) => sum + own * (this.priced[kind] ?? 0), 0);
     return Math.max(0, open - value);
   }
 
@@ -161,7 +195,7 @@ class Packer {
     if (this.reachedBefore(waste)) return;
     const moves: { i: number; fill: Fill; opening: number; waste: number }[] = [];
     this.job.own.forEach((b, i) => {
-      if (this.bin(i).cuts < (this.job.cuts[first] ?? 0)) return;
+      if (!this.fits(first, this.bin(i).site, this.bin(i).cuts)) return;
       let opening = 0;
       if ((this.free[i] ?? 0) === 0) {
         const drivers = this.drivers[i] ?? 0;
@@ -184,14 +218,16 @@ class Packer {
     return undefined;
   }
 
-  private take(i: number, { counts }: Fill, waste: number): void {
+  private take(i: number, { counts, extra }: Fill, waste: number): void {
     const opens = (this.free[i] ?? 0) === 0;
     const channels = this.bin(i).channels;
     if (opens) this.drivers[i] = (this.drivers[i] ?? 0) + 1;
     this.free[i] = (this.free[i] ?? 0) + (opens ? channels : 0) - 1;
     counts.forEach((own, kind) => (this.left[kind] = (this.left[kind] ?? 0) - own));
     this.channels.push({ bin: this.job.own[i] ?? 0, counts });
+    this.extra += extra;
     this.search(waste);
+    this.extra -= extra;
     this.channels.pop();
     counts.forEach((own, kind) => (this.left[kind] = (this.left[kind] ?? 0) + own));
     this.free[i] = (this.free[i] ?? 0) - (opens ? channels : 0) + 1;
@@ -200,8 +236,8 @@ class Packer {
 }
 
 /** The cheapest packing that wastes less than the budget, or null; `complete` says that there is none cheaper. */
-export function packSite(job: PackJob, budget: number): { best: Packing | null; complete: boolean } {
+export function pack(job: PackJob, budget: number): Packed {
   const packer = new Packer(job, budget);
   packer.search(0);
-  return { best: packer.best, complete: packer.complete };
+  return { best: packer.best, complete: packer.complete, steps: packer.steps };
 }

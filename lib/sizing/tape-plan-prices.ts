@@ -3,15 +3,17 @@
  * numbers of drivers, all allowed in part. It starts with few columns; its duals are prices, and whatever option or
  * load is worth more than it costs at them is added, until nothing is.
  */
-import { type Bound, boundOf, kindOf, pricedOption, pricesByCuts, type Region } from './tape-plan-bound';
+import { type Bound, boundOf, kindOf, type Prices, pricesByCuts, type Region } from './tape-plan-bound';
 import type { Choices } from './tape-plan-choices';
-import { fullestLoad, type Kinds, type Load } from './tape-plan-knapsack';
+import type { Kinds, Load } from './tape-plan-knapsack';
 import { type Column, GrowingProgram } from './tape-plan-simplex';
 
 /** Keeps the program from going round in circles where many amounts are zero. */
 const spread = (row: number) => 1e-7 * (1 + ((row * 0.618034) % 1));
 const TINY = 1e-9;
 const MAX_ROUNDS = 400;
+/** Share of the best prices so far in those that columns are sought at. */
+const NEARER = 0.7;
 
 interface OptionColumn {
   run: number;
@@ -85,14 +87,13 @@ export class Relaxation {
     pool.loads.forEach((own) => this.program.add(this.loadColumn(own)));
   }
 
-  private addOption(own: OptionColumn): void {
-    if (!this.region.options[own.run]?.includes(own.option)) return;
-    const column: Column = { cost: -this.dear, rows: [own.run], factors: [1] };
+  private optionColumn(own: OptionColumn): Column {
     const [rows, factors] = [[own.run], [1]];
+    let cost = -this.dear;
     this.choices.runs[own.run]?.options[own.option]?.sections.forEach(({ cuts, spots }, j) => {
       const spot = spots[own.spots[j] ?? 0];
       if (!spot) return;
-      column.cost += spot.variant.cost;
+      cost += spot.variant.cost;
       const kind = kindOf(this.kinds[spot.site] ?? { cuts: [], supply: [] }, cuts);
       const row = this.rows.kind[spot.site]?.[kind];
       if (row === undefined) return;
@@ -102,8 +103,13 @@ export class Relaxation {
         factors.push(1);
       } else factors[at] = (factors[at] ?? 0) + 1;
     });
+    return { cost, rows, factors };
+  }
+
+  private addOption(own: OptionColumn, column = this.optionColumn(own)): void {
+    if (!this.region.options[own.run]?.includes(own.option)) return;
     this.optionOf.set(this.program.columns.length, own);
-    this.program.add({ cost: column.cost, rows, factors });
+    this.program.add(column);
   }
 
   private loadColumn({ bin, kinds, counts }: LoadColumn): Column {
@@ -115,56 +121,58 @@ export class Relaxation {
     };
   }
 
-  private price = (site: number, kind: number) =>
-    Math.max(0, -(this.program.duals[this.rows.kind[site]?.[kind] ?? 0] ?? 0));
-
-  /** Adds the best column of every run and bin that lowers the cost; how many there were. */
-  private grow(): number {
+  private prices(): Prices {
     const { duals } = this.program;
+    return pricesByCuts(this.choices, this.kinds, (site, kind) =>
+      Math.max(0, -(duals[this.rows.kind[site]?.[kind] ?? 0] ?? 0)),
+    );
+  }
+
+  /** Adds the best column of every run and bin at the bound's prices that lowers the cost; how many there were. */
+  private grow({ runs, knapsacks }: Bound): number {
     const before = this.program.columns.length;
-    const prices = pricesByCuts(this.choices, this.kinds, this.price);
-    this.choices.runs.forEach(({ options }, run) => {
-      let best: OptionColumn | null = null;
-      let least = (duals[run] ?? 0) + this.dear - TINY * this.dear;
-      for (const option of this.region.options[run] ?? []) {
-        const own = options[option];
-        if (!own) continue;
-        const { cost, chosen } = pricedOption(own, prices);
-        if (cost < least) [best, least] = [{ run, option, spots: chosen }, cost];
-      }
-      if (!best) return;
-      this.pool.options.push(best);
-      this.addOption(best);
+    const helps = (column: Column) => this.program.reducedCost(column) < -TINY * this.dear;
+    runs.forEach(({ option, spots }, run) => {
+      if (option < 0) return;
+      const own = { run, option, spots };
+      const column = this.optionColumn(own);
+      if (!helps(column)) return;
+      this.pool.options.push(own);
+      this.addOption(own, column);
     });
     this.choices.bins.forEach((bin, b) => {
-      const kinds = this.kinds[bin.site];
-      if (!kinds || this.region.most[b] === 0) return;
-      const { worth, ...load } = fullestLoad(bin.cuts, kinds, (kind) => this.price(bin.site, kind));
-      if (worth <= -(duals[this.rows.bin[b] ?? 0] ?? 0) + TINY * this.dear) return;
-      this.pool.loads.push({ bin: b, ...load });
-      this.program.add(this.loadColumn({ bin: b, ...load }));
+      const knapsack = knapsacks[bin.site];
+      if (!knapsack || this.region.most[b] === 0) return;
+      const load = { bin: b, ...knapsack.load(bin.cuts) };
+      const column = this.loadColumn(load);
+      if (!helps(column)) return;
+      this.pool.loads.push(load);
+      this.program.add(column);
     });
     return this.program.columns.length - before;
   }
 
-  /** Solves and grows in turn. The best bound seen on the way is as true as the last. */
-  run(mostWork: number, enough: number): Relaxed {
-    let best: Bound | null = null;
-    for (let round = 0; round < MAX_ROUNDS; round++) {
+  /**
+   * Solves and grows in turn, at prices between the program's and the best so far: the program's own swing widely
+   * until it has the columns it needs. The best bound seen on the way is as true as the last.
+   */
+  run(start: Bound, mostWork: number, enough: number): Relaxed {
+    let best = start;
+    const growAt = (prices: Prices) => {
+      const bound = boundOf(this.choices, this.kinds, this.region, prices);
+      if (bound.cost > best.cost) best = bound;
+      return this.grow(bound);
+    };
+    for (let round = 0; round < MAX_ROUNDS && best.cost < enough; round++) {
       this.program.solve(mostWork);
-      const grown = this.grow();
-      const over = this.program.work >= mostWork || round === MAX_ROUNDS - 1;
-      if (grown > 0 && !over && round % 8 !== 7) continue;
-      const bound = boundOf(
-        this.choices,
-        this.kinds,
-        this.region,
-        pricesByCuts(this.choices, this.kinds, this.price),
+      const own = this.prices();
+      const between = own.map((prices, site) =>
+        prices.map((price, cuts) => NEARER * (best.prices[site]?.[cuts] ?? 0) + (1 - NEARER) * price),
       );
-      if (!best || bound.cost > best.cost) best = bound;
-      if (grown === 0 || over || best.cost >= enough) break;
+      if (growAt(between) === 0 && growAt(own) === 0) break;
+      if (this.program.work >= mostWork) break;
     }
-    return { ...this.amounts(), bound: best as Bound, work: this.program.work };
+    return { ...this.amounts(), bound: best, work: this.program.work };
   }
 
   private amounts(): Pick<Relaxed, 'drivers' | 'shares'> {

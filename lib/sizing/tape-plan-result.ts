@@ -79,50 +79,52 @@ export interface ChosenSection {
   variant: Variant;
 }
 
-/** The chosen sections in the order of runs. */
+/** The chosen sections in the order of runs, each fed from where its output is. */
 export function chosenSections({ choices }: Case, found: Found): ChosenSection[] {
-  return found.options.flatMap(({ option, spots }, run) => {
+  const siteOf = new Map<string, number>();
+  for (const { bin, sections } of found.channels)
+    for (const { run, section } of sections) siteOf.set(`${run} ${section}`, choices.bins[bin]?.site ?? 0);
+  return found.options.flatMap((option, run) => {
     const own: Option | undefined = choices.runs[run]?.options[option];
     return (own?.sections ?? []).flatMap((piece, section) => {
-      const spot = piece.spots[spots[section] ?? 0];
+      const spot = piece.spots.find(({ site }) => site === siteOf.get(`${run} ${section}`));
       return spot ? [{ run, section, piece, site: spot.site, variant: spot.variant }] : [];
     });
   });
 }
 
-/** Sections of each channel, channels of one bin put into drivers one after another. */
-function driversOf({ choices, offer, check, input }: Case, found: Found, chosen: readonly ChosenSection[]) {
-  const waiting = new Map<string, ChosenSection[]>();
-  for (const own of chosen) {
-    const key = `${own.site} ${own.piece.cuts}`;
-    waiting.set(key, [...(waiting.get(key) ?? []), own]);
-  }
-  const channels = choices.bins.map((): ChosenSection[][] => []);
-  for (const { site, kinds, packing } of found.packings)
-    for (const { bin, counts } of packing.channels)
-      channels[bin]?.push(
-        counts.flatMap((n, kind) => (waiting.get(`${site} ${kinds[kind]}`) ?? []).splice(0, n)),
-      );
+type Output = PlannedOutput & { from: ChosenSection[] };
+
+function outputOf({ check, input }: Case, rating: number, from: ChosenSection[]): Output {
+  const watts = from.reduce((sum, { piece }) => sum + piece.cuts, 0) * check.cutWatts;
+  return {
+    from,
+    sections: from.map(({ run, section }) => ({ run, section })),
+    amps: watts / input.tape.volts,
+    watts,
+    loadPct: (watts / rating) * 100,
+  };
+}
+
+/** Channels of one bin, put into drivers one after another. */
+function driversOf(c: Case, found: Found, chosen: readonly ChosenSection[]) {
+  const { choices, offer } = c;
+  const byId = new Map(chosen.map((own) => [`${own.run} ${own.section}`, own]));
   return choices.bins.flatMap((bin, b) => {
     const type = offer.types[bin.type];
-    const own = channels[b] ?? [];
+    const own = found.channels.filter((channel) => channel.bin === b);
     if (!type) return [];
     return Array.from({ length: Math.ceil(own.length / bin.channels) }, (_, d) => ({
       type,
       place: choices.places[bin.place] ?? '',
-      outputs: own
-        .slice(d * bin.channels, (d + 1) * bin.channels)
-        .map((sections): PlannedOutput & { from: ChosenSection[] } => {
-          const cuts = sections.reduce((sum, { piece }) => sum + piece.cuts, 0);
-          const watts = cuts * check.cutWatts;
-          return {
-            from: sections,
-            sections: sections.map(({ run, section }) => ({ run, section })),
-            amps: watts / input.tape.volts,
-            watts,
-            loadPct: (watts / type.given.channelWatts) * 100,
-          };
-        }),
+      outputs: own.slice(d * bin.channels, (d + 1) * bin.channels).map(({ sections }) => {
+        const from = sections.flatMap(({ run, section }) => byId.get(`${run} ${section}`) ?? []);
+        return outputOf(
+          c,
+          type.given.channelWatts,
+          from.sort((x, y) => x.run - y.run || x.section - y.section),
+        );
+      }),
     }));
   });
 }

@@ -5,29 +5,57 @@
  * far the plan can be from the best.
  */
 import { REL } from '@/lib/engine/contract';
-import { type Bound, boundOf, kindsOf, pricesByCuts, type Region } from './tape-plan-bound';
+import {
+  type Bound,
+  boundOf,
+  kindOf,
+  kindsOf,
+  pricedOption,
+  type Prices,
+  pricesByCuts,
+  type Region,
+} from './tape-plan-bound';
 import type { Choices, Option } from './tape-plan-choices';
 import type { Kinds } from './tape-plan-knapsack';
-import { packSite, type Packing } from './tape-plan-pack';
+import { pack, type Packed } from './tape-plan-pack';
+import { componentsOf } from './tape-plan-components';
 import { type Pool, Relaxation, type Relaxed } from './tape-plan-prices';
+
+/** Extra costs that differ by less than this share of the gap are alike. */
+const ALIKE = 1e-6;
+
+/** How hard the options of one part are tried. */
+export interface Trial {
+  /** Combinations of options. */
+  combinations: number;
+  /** Loads tried for each channel, and steps of packing in all. */
+  width: number;
+  steps: number;
+}
 
 /** How much work a search may do: counts, so that every machine ends at the same plan. */
 export interface Effort {
   /** Multiplications of the linear programs in all. */
   work: number;
-  parts: number;
-  /** Combinations of options tried in one part. */
-  combinations: number;
-  width: number;
+  /** Steps of packing in all. */
   steps: number;
+  parts: number;
+  /** Of a part that can be split further, and of one that can't. */
+  trial: Trial;
+  last: Trial;
 }
 
 export interface Found {
   cost: number;
-  /** Of each run: its option, and the spot of each section. */
-  options: { option: number; spots: number[] }[];
-  /** Of each site: what its sections are packed into. */
-  packings: { site: number; kinds: number[]; packing: Packing }[];
+  /** Option of each run. */
+  options: number[];
+  /** What each channel feeds. */
+  channels: { bin: number; sections: SectionId[] }[];
+}
+
+export interface SectionId {
+  run: number;
+  section: number;
 }
 
 export interface Searched {
@@ -36,148 +64,81 @@ export interface Searched {
   bound: number;
 }
 
-interface SiteLoad {
-  /** Cuts of each kind, descending. */
-  cuts: number[];
-  counts: number[];
-}
-
 interface Choice {
   option: number;
-  spots: number[];
+  /** Least cost of its feeders. */
   cost: number;
-  /** Above the run's cheapest at the prices. */
+  /** At the prices, above the run's cheapest. */
   extra: number;
-}
-
-/** Ways to serve a section that cost at most `most` more than its cheapest, as combinations over an option. */
-function choicesWithin(
-  option: Option,
-  index: number,
-  bound: Bound,
-  runCost: number,
-  most: number,
-  limit: number,
-): Choice[] {
-  const priced = option.sections.map(({ cuts, spots }) => {
-    const own = spots.map(({ site, variant }, spot) => ({
-      spot,
-      cost: variant.cost,
-      priced: variant.cost + (bound.prices[site]?.[cuts] ?? 0),
-    }));
-    return own.sort((a, b) => a.priced - b.priced);
-  });
-  const least = priced.reduce((sum, own) => sum + (own[0]?.priced ?? 0), 0) - runCost;
-  const found: Choice[] = [];
-  const walk = (j: number, spots: number[], cost: number, extra: number): void => {
-    if (found.length >= limit) return;
-    const own = priced[j];
-    if (!own) return void found.push({ option: index, spots, cost, extra });
-    for (const one of own) {
-      const more = extra + one.priced - (own[0]?.priced ?? 0);
-      if (more > most) break;
-      walk(j + 1, [...spots, one.spot], cost + one.cost, more);
-    }
-    return undefined;
-  };
-  if (least <= most) walk(0, [], 0, least);
-  return found;
 }
 
 class Search {
   best: Found | null = null;
   work = 0;
-  private readonly siteBins: number[][];
-  private readonly memo = new Map<string, { best: Packing | null; complete: boolean }>();
+  steps = 0;
+  private readonly memo = new Map<string, Packed>();
 
-  constructor(
-    private readonly choices: Choices,
-    private readonly effort: Effort,
-  ) {
-    this.siteBins = Array.from({ length: choices.sites }, (_, site) =>
-      choices.bins.map((_own, b) => b).filter((b) => choices.bins[b]?.site === site),
-    );
-  }
+  constructor(private readonly choices: Choices) {}
 
   private get incumbent(): number {
     return this.best?.cost ?? Infinity;
   }
 
-  /** Sections of the chosen options by site and kind. */
-  private siteLoads(chosen: readonly Choice[]): SiteLoad[] {
-    const sites = this.siteBins.map(() => new Map<number, number>());
-    chosen.forEach(({ option, spots }, r) =>
-      this.choices.runs[r]?.options[option]?.sections.forEach(({ cuts, spots: all }, j) => {
-        const own = sites[all[spots[j] ?? 0]?.site ?? 0];
-        own?.set(cuts, (own.get(cuts) ?? 0) + 1);
-      }),
-    );
-    return sites.map((own) => {
-      const cuts = [...own.keys()].sort((a, b) => b - a);
-      return { cuts, counts: cuts.map((kind) => own.get(kind) ?? 0) };
-    });
-  }
-
-  /** Packs every site; keeps the plan if it is the cheapest so far. Whether nothing cheaper was overlooked. */
-  private pack(chosen: readonly Choice[], region: Region, bound: Bound, budget: number): boolean {
+  /** Packs the sections of the options; keeps the plan if it is the cheapest so far. Whether no cheaper was overlooked. */
+  private packOptions(chosen: readonly Choice[], region: Region, bound: Bound, effort: Trial): boolean {
+    const budget = this.incumbent - bound.cost;
+    const channels: Found['channels'] = [];
     let cost = chosen.reduce((sum, own) => sum + own.cost, 0);
     let complete = true;
-    const packings: Found['packings'] = [];
-    for (const [site, { cuts, counts }] of this.siteLoads(chosen).entries()) {
-      if (cuts.length === 0) continue;
-      const key = `${site}|${cuts.join()}|${counts.join()}`;
+    for (const { own, kinds, members } of componentsOf(this.choices, chosen)) {
+      const key = `${own.join()}|${kinds.map(({ cuts, count, extra }) => `${cuts}*${count}:${extra.join()}`).join('|')}`;
       let found = this.memo.get(key);
       if (!found) {
-        const prices = cuts.map((own) => bound.prices[site]?.[own] ?? 0);
-        const { width, steps } = this.effort;
-        const own = this.siteBins[site] ?? [];
-        const job = { bins: this.choices.bins, own, region, bound, cuts, prices, counts, width, steps };
-        found = packSite(job, budget);
+        const { width, steps } = effort;
+        found = pack({ bins: this.choices.bins, own, region, bound, kinds, width, steps }, budget);
+        this.steps += found.steps;
         this.memo.set(key, found);
       }
       complete = complete && found.complete;
       if (!found.best) return complete;
       cost += found.best.cost;
-      packings.push({ site, kinds: cuts, packing: found.best });
+      const waiting = members.map((all) => [...all]);
+      for (const { bin, counts } of found.best.channels)
+        channels.push({ bin, sections: counts.flatMap((n, kind) => waiting[kind]?.splice(0, n) ?? []) });
     }
-    if (cost < this.incumbent)
-      this.best = { cost, options: chosen.map(({ option, spots }) => ({ option, spots })), packings };
+    if (cost < this.incumbent) this.best = { cost, options: chosen.map(({ option }) => option), channels };
     return complete;
   }
 
   /** Tries the options of a region whose extra cost lies within the gap. Whether all was searched. */
-  tryOptions(region: Region, bound: Bound, combinations: number): boolean {
+  tryOptions(region: Region, bound: Bound, effort: Trial, shares?: Relaxed['shares']): boolean {
     this.memo.clear();
     const gap = this.incumbent - bound.cost;
-    let complete = true;
     const byRun = this.choices.runs.map(({ options }, r) => {
-      const all = (region.options[r] ?? []).flatMap((o) => {
-        const found = choicesWithin(
-          options[o] as Option,
-          o,
-          bound,
-          bound.runCosts[r] ?? 0,
-          gap,
-          combinations,
-        );
-        if (found.length >= combinations) complete = false;
-        return found;
+      const all = (region.options[r] ?? []).map((option): Choice => {
+        const own = options[option] as Option;
+        const extra = pricedOption(own, bound.prices).cost - (bound.runs[r]?.cost ?? 0);
+        return { option, cost: own.leastCost, extra };
       });
-      return all.sort((a, b) => a.extra - b.extra);
+      const share = ({ option }: Choice) => shares?.[r]?.[option] ?? 0;
+      const near = ALIKE * Math.min(gap, bound.cost);
+      const byExtra = (a: Choice, b: Choice) =>
+        Math.abs(a.extra - b.extra) > near ? a.extra - b.extra : share(b) - share(a) || a.extra - b.extra;
+      return all.filter(({ extra }) => extra < gap).sort(byExtra);
     });
+    let complete = true;
     let tried = 0;
     const walk = (r: number, chosen: Choice[], extra: number): void => {
       const own = byRun[r];
       if (!own) {
-        if (++tried > combinations) complete = false;
-        else if (!this.pack(chosen, region, bound, this.incumbent - bound.cost)) complete = false;
+        if (++tried > effort.combinations || !this.packOptions(chosen, region, bound, effort))
+          complete = false;
         return;
       }
       for (const one of own) {
-        if (tried > combinations) return;
+        if (tried > effort.combinations) return;
         // The best may have been improved on the way.
-        if (extra + one.extra >= this.incumbent - bound.cost) break;
-        walk(r + 1, [...chosen, one], extra + one.extra);
+        if (extra + one.extra < this.incumbent - bound.cost) walk(r + 1, [...chosen, one], extra + one.extra);
       }
     };
     walk(0, [], 0);
@@ -188,6 +149,8 @@ class Search {
 interface Part {
   region: Region;
   bound: number;
+  /** To start from. */
+  prices: Prices;
 }
 
 /** Beyond this a figure of the linear program is not whole. */
@@ -256,6 +219,28 @@ function evenPrices(choices: Choices, kinds: readonly Kinds[]) {
   });
 }
 
+/** The columns of a plan, for the linear program to start from. */
+function poolOf(best: Found | null, { bins, runs }: Choices, kinds: readonly Kinds[]): Pool {
+  const pool: Pool = { options: [], loads: [] };
+  if (!best) return pool;
+  const spots = best.options.map((option, r) => runs[r]?.options[option]?.sections.map(() => 0) ?? []);
+  for (const { bin, sections } of best.channels) {
+    const site = bins[bin]?.site ?? 0;
+    const counts = new Map<number, number>();
+    for (const { run, section } of sections) {
+      const own = runs[run]?.options[best.options[run] ?? 0]?.sections[section];
+      if (!own) continue;
+      const spot = own.spots.findIndex((one) => one.site === site);
+      if (spots[run]) spots[run][section] = spot;
+      const kind = kindOf(kinds[site] ?? { cuts: [], supply: [] }, own.cuts);
+      counts.set(kind, (counts.get(kind) ?? 0) + 1);
+    }
+    pool.loads.push({ bin, kinds: [...counts.keys()], counts: [...counts.values()] });
+  }
+  pool.options = best.options.map((option, run) => ({ run, option, spots: spots[run] ?? [] }));
+  return pool;
+}
+
 /** More than any run costs with drivers of its own. */
 function dearOf({ runs, bins }: Choices): number {
   const driver = bins.reduce((most, { cost }) => Math.max(most, cost), 0);
@@ -285,30 +270,33 @@ export function cheapestPlan(choices: Choices, effort: Effort): Searched {
     most: choices.bins.map(() => Infinity),
     options: choices.runs.map(({ options }) => options.map((_, o) => o)),
   };
-  const search = new Search(choices, effort);
+  const search = new Search(choices);
   const even = boundOf(choices, kinds, whole, evenPrices(choices, kinds));
-  search.tryOptions(whole, even, 1);
-  const pool: Pool = { options: [], loads: [] };
+  search.tryOptions(whole, even, { ...effort.trial, combinations: 1 });
+  const pool = poolOf(search.best, choices, kinds);
   const dear = dearOf(choices);
-  const open: Part[] = [{ region: whole, bound: even.cost }];
+  const open: Part[] = [{ region: whole, bound: even.cost, prices: even.prices }];
   /** Least bound of the parts that were left without being searched through. */
   let left = Infinity;
   const enough = () => (search.best?.cost ?? Infinity) * (1 - REL);
-  for (let part = 0; open.length > 0 && part < effort.parts && search.work < effort.work; part++) {
+  const spent = () => search.work >= effort.work || search.steps >= effort.steps;
+  for (let part = 0; open.length > 0 && part < effort.parts && !spent(); part++) {
     open.sort((a, b) => b.bound - a.bound);
-    const { region, bound } = open.pop() as Part;
+    const { region, bound, prices } = open.pop() as Part;
     if (bound >= enough()) continue;
     const relaxed = new Relaxation(choices, kinds, region, pool, dear).run(
+      boundOf(choices, kinds, region, prices),
       effort.work - search.work,
       enough(),
     );
     search.work += relaxed.work;
     const own = Math.max(bound, relaxed.bound.cost);
     if (own >= enough()) continue;
-    const searched = search.tryOptions(region, relaxed.bound, effort.combinations);
-    if (searched || own >= enough()) continue;
     const parts = splitPart(relaxed, region) ?? splitWhole(relaxed, region);
-    if (parts) open.push(...parts.map((one) => ({ region: one, bound: own })));
+    const trial = parts ? effort.trial : effort.last;
+    const searched = search.tryOptions(region, relaxed.bound, trial, relaxed.shares);
+    if (searched || own >= enough()) continue;
+    if (parts) open.push(...parts.map((one) => ({ region: one, bound: own, prices: relaxed.bound.prices })));
     else left = Math.min(left, own);
   }
   const best = search.best;

@@ -10,6 +10,8 @@ export interface Column {
 }
 
 const TINY = 1e-9;
+/** Below this an entry of the inverse is rounding. */
+const DUST = 1e-13;
 /** Least pivot that the inverse is trusted with. */
 const LEAST_PIVOT = 1e-7;
 
@@ -41,7 +43,8 @@ export class GrowingProgram {
     this.isBasic.push(false);
   }
 
-  private reducedCost({ cost, rows, factors }: Column): number {
+  /** What one unit of the column changes the cost by, at the duals. */
+  reducedCost({ cost, rows, factors }: Column): number {
     let reduced = cost;
     for (let i = 0; i < rows.length; i++) reduced -= (this.duals[rows[i] ?? 0] ?? 0) * (factors[i] ?? 0);
     return reduced;
@@ -91,30 +94,38 @@ export class GrowingProgram {
     return row;
   }
 
-  private pivot(entering: number, row: number): void {
+  private pivot(entering: number, row: number, reduced: number): void {
     const size = this.limits.length;
-    const pivot = this.direction[row] ?? 1;
+    const { inverse, direction, values, duals } = this;
+    const pivot = direction[row] ?? 1;
     const at = row * size;
-    for (let j = 0; j < size; j++) this.inverse[at + j] = (this.inverse[at + j] ?? 0) / pivot;
-    const amount = Math.max(0, (this.values[row] ?? 0) / pivot);
-    this.values[row] = amount;
+    // Most of the inverse is zero: only where the pivot's row is not can anything change.
+    const places: number[] = [];
+    for (let j = 0; j < size; j++) {
+      const own = (inverse[at + j] ?? 0) / pivot;
+      inverse[at + j] = Math.abs(own) < DUST ? 0 : own;
+      if (Math.abs(own) >= DUST) places.push(j);
+    }
+    const amount = Math.max(0, (values[row] ?? 0) / pivot);
+    values[row] = amount;
     for (let i = 0; i < size; i++) {
-      const factor = this.direction[i] ?? 0;
+      const factor = direction[i] ?? 0;
       if (i === row || factor === 0) continue;
       const to = i * size;
-      for (let j = 0; j < size; j++)
-        this.inverse[to + j] = (this.inverse[to + j] ?? 0) - factor * (this.inverse[at + j] ?? 0);
-      this.values[i] = Math.max(0, (this.values[i] ?? 0) - factor * amount);
-      this.work += size;
+      for (const j of places) inverse[to + j] = (inverse[to + j] ?? 0) - factor * (inverse[at + j] ?? 0);
+      values[i] = Math.max(0, (values[i] ?? 0) - factor * amount);
+      this.work += places.length;
     }
+    for (const j of places) duals[j] = (duals[j] ?? 0) + reduced * (inverse[at + j] ?? 0);
     const left = this.basis[row] ?? -1;
     if (left >= 0) this.isBasic[left] = false;
     const isSlack = entering >= this.columns.length;
     this.basis[row] = isSlack ? -1 : entering;
     if (!isSlack) this.isBasic[entering] = true;
-    this.work += size;
+    this.work += size + this.columns.length;
   }
 
+  /** Afresh, as what is carried along gathers rounding. */
   private setDuals(): void {
     const size = this.limits.length;
     this.duals.fill(0);
@@ -132,11 +143,12 @@ export class GrowingProgram {
     while (this.work < mostWork) {
       const entering = this.entering();
       if (entering < 0) return;
+      const column = this.columns[entering];
+      const reduced = column ? this.reducedCost(column) : -(this.duals[entering - this.columns.length] ?? 0);
       this.setDirection(entering);
       const row = this.leaving();
       if (row < 0) return;
-      this.pivot(entering, row);
-      this.setDuals();
+      this.pivot(entering, row, reduced);
     }
   }
 

@@ -20,8 +20,20 @@ export type { TapePlan } from './tape-plan-result';
 
 /** Jobs of an everyday size are searched to the end; the largest within a moment. */
 const EVERYDAY_RUNS = 12;
-const EVERYDAY: Effort = { work: 4e8, parts: 2000, combinations: 400, width: 400, steps: 20_000 };
-const LARGE: Effort = { work: 4e7, parts: 3, combinations: 8, width: 4, steps: 3000 };
+const EVERYDAY: Effort = {
+  work: 3e8,
+  steps: 5e6,
+  parts: 4000,
+  trial: { combinations: 3, width: 12, steps: 300 },
+  last: { combinations: 1, width: Infinity, steps: 300_000 },
+};
+const LARGE: Effort = {
+  work: 4e7,
+  steps: 1e5,
+  parts: 3,
+  trial: { combinations: 8, width: 4, steps: 3000 },
+  last: { combinations: 8, width: 4, steps: 3000 },
+};
 
 function cutsOf({ runs, tape }: TapePlanInput, limits: Limits): number[] {
   if (runs.length > limits.maxRuns) {

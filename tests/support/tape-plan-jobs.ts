@@ -34,19 +34,20 @@ export interface JobShape {
   runs: number;
   model?: 'constant-current' | 'resistive' | 'led-string';
   places?: number;
+  /** Lengths of a segment to choose from. */
+  cutMetres?: readonly number[];
+  maxSections?: number;
 }
 
 /** A job of that many runs. Prices, lengths and distances vary; drivers of 60 to 200 W, limited and not. */
-export function randomJob(
-  seed: number,
-  { runs, model = 'constant-current', places = 2 }: JobShape,
-): TapePlanInput {
+export function randomJob(seed: number, shape: JobShape): TapePlanInput {
+  const { runs, model = 'constant-current', places = 2, cutMetres: cuts = [0.05, 0.0625, 0.1] } = shape;
   const random = randomOf(seed);
   const whole = (from: number, to: number) => from + Math.floor(random() * (to - from + 1));
   const pick = <T>(of: readonly T[]): T => of[whole(0, of.length - 1)] as T;
   const tenths = (from: number, to: number) => whole(from * 10, to * 10) / 10;
   const names = ['closet', 'ceiling', 'cellar'].slice(0, whole(1, places));
-  const cutMetres = pick([0.05, 0.0625, 0.1]);
+  const cutMetres = pick(cuts);
   const amps = (pick([4.8, 9.6, 14.4, 19.2]) * cutMetres) / VOLTS;
   return {
     basis: 'us',
@@ -105,6 +106,11 @@ export function randomJob(
       hoursPerDriver: 0.5,
       hoursPerMetre: pick([0, 0.02, 0.04]),
     },
-    limits: { maxDropPct: pick([3, 5]), minDimmestPct: 85, loadFraction: 0.8 },
+    limits: {
+      maxDropPct: pick([3, 5]),
+      minDimmestPct: 85,
+      loadFraction: 0.8,
+      ...(shape.maxSections === undefined ? {} : { maxSections: shape.maxSections }),
+    },
   };
 }
