@@ -1,5 +1,9 @@
 /** Light, energy and money over time, in the order in which `engine -- list` names them. */
 import type { Calculation } from '@/lib/engine/contract';
 import { photometricFileCalculation } from './photometric-file';
+import { pointIlluminanceCalculation } from './point-illuminance';
 
-export const lightingCalculations = [photometricFileCalculation] as unknown as Calculation[];
+export const lightingCalculations = [
+  photometricFileCalculation,
+  pointIlluminanceCalculation,
+] as unknown as Calculation[];

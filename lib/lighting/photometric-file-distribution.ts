@@ -80,11 +80,18 @@ function below(values: readonly number[], x: number): number {
   return low;
 }
 
-function between(values: readonly number[], x: number): { index: number; share: number } {
+/** Where `x` lies among the values: 2.25 is a quarter of the way from the third to the fourth. */
+function positionIn(values: readonly number[], x: number): number {
   const index = below(values, x);
   const from = values[index] ?? 0;
   const to = values[index + 1] ?? from;
-  return { index, share: to > from ? Math.min(1, Math.max(0, (x - from) / (to - from))) : 0 };
+  return to > from ? index + Math.min(1, Math.max(0, (x - from) / (to - from))) : index;
+}
+
+function valueAt(values: readonly number[] | undefined, position: number): number {
+  const index = Math.floor(position);
+  const from = values?.[index] ?? 0;
+  return from + ((values?.[index + 1] ?? from) - from) * (position - index);
 }
 
 /**
@@ -93,16 +100,13 @@ function between(values: readonly number[], x: number): { index: number; share: 
  * Source: linear interpolation in C and gamma as in CIE 140 and EN 13201-3 (from memory).
  */
 export function intensityAt(distribution: Distribution, horizontal: number, vertical: number): number {
-  const angles = distribution.vertical;
+  const { vertical: angles, candela } = distribution;
   if (vertical < (angles[0] ?? 0) || vertical > (angles.at(-1) ?? 0)) return 0;
-  const c = between(distribution.horizontal, turned(horizontal));
-  const g = between(angles, vertical);
-  const along = (plane: readonly number[] | undefined): number => {
-    const from = plane?.[g.index] ?? 0;
-    return from + ((plane?.[g.index + 1] ?? from) - from) * g.share;
-  };
-  const from = along(distribution.candela[c.index]);
-  return from + (along(distribution.candela[c.index + 1]) - from) * c.share;
+  const c = positionIn(distribution.horizontal, turned(horizontal));
+  const gamma = positionIn(angles, vertical);
+  const plane = Math.floor(c);
+  const from = valueAt(candela[plane], gamma);
+  return c === plane ? from : from + (valueAt(candela[plane + 1], gamma) - from) * (c - plane);
 }
 
 /** What is wrong with vertical angles of type C, and with which; null where they are right. */

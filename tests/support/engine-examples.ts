@@ -228,6 +228,16 @@ export const EXAMPLES: Readonly<Record<string, Record<string, unknown>>> = {
       '1000 866 500 0',
     ].join('\n'),
   },
+  'point-illuminance': {
+    lengthMetres: 8,
+    widthMetres: 5,
+    mountingMetres: 2.2,
+    photometry: { source: 'cosine', lumens: 3500 },
+    layout: { rows: 2, columns: 3, rotationDegrees: 90 },
+    lightLossFactor: 0.8,
+    targetLux: 300,
+    minimumUniformity: 0.6,
+  },
   'price-lines': {
     currency: 'USD',
     taxRounding: 'line',

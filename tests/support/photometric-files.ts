@@ -125,3 +125,16 @@ export function eulumdat(options: EulumdatOptions): string {
     '',
   ].join('\r\n');
 }
+
+/** 1000 cd straight down: 1000*pi lumens. */
+const lambert: Law = (_, gamma) => 1000 * Math.max(0, cosine(gamma));
+export const lambertLm63 = (change: Partial<Lm63Options> = {}) => lm63({ law: lambert, ...change });
+export const lambertEulumdat = (change: Partial<EulumdatOptions> = {}) =>
+  eulumdat({ law: lambert, isym: 1, lampSets: [{ lumens: 1000 * Math.PI }], ...change });
+
+/** Replaces a whole line, counted from 1. */
+export const withLine = (text: string, line: number, change: (old: string) => string) =>
+  text
+    .split('\r\n')
+    .map((old, k) => (k === line - 1 ? change(old) : old))
+    .join('\r\n');

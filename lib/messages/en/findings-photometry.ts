@@ -38,6 +38,36 @@ export const photometryFindings = {
   'finding.photometry-efficacy-unlikely.title': 'Efficacy too good to be true',
   'finding.photometry-efficacy-unlikely.body':
     '{efficacy} lm/W is more than white light reaches (about {most}). Watts or multiplier of the file are wrong.',
+  'finding.point-no-light.title': 'No light reaches the plane',
+  'finding.point-no-light.body':
+    'None of the {points} points gets light from the luminaires. They may shine upwards only, or the file holds no light.',
+  'finding.point-direct-only.title': 'Direct light only',
+  'finding.point-direct-only.body':
+    'The average of {average:lx} comes straight from the luminaires. Walls, ceiling and floor add to it; furniture takes from it.',
+  'finding.point-uplight-not-counted.title': 'Uplight is left out',
+  'finding.point-uplight-not-counted.body':
+    '{uplightPct:%} of the light goes up and is not in these figures at all. A light ceiling gives a good part of it back.',
+  'finding.point-near-field.title': 'Close to a large luminaire',
+  'finding.point-near-field.body':
+    'The luminaire is {openingMetres:m} long and hangs {mountingMetres:m} over the plane. Under {neededMetres:m} it is no point any more: right below it the figures are too high.',
+  'finding.point-grid-coarse.title': 'Points too far apart',
+  'finding.point-grid-coarse.body':
+    'The points lie {stepMetres:m} apart; at this height and beam {spotMetres:m} is the most. Bright and dark spots can fall between them: choose a smaller step.',
+  'finding.point-wall-band-dropped.title': 'Calculated from wall to wall',
+  'finding.point-wall-band-dropped.body':
+    'The room is only {metres:m} wide, too narrow to leave out a band along its walls.',
+  'finding.point-under-target.title': 'Average under the target',
+  'finding.point-under-target.body':
+    'The luminaires alone give {average:lx}; {targetLux:lx} are wanted. See whether walls and ceiling make up for it, or add light.',
+  'finding.point-over-target.title': 'Far more light than wanted',
+  'finding.point-over-target.body':
+    '{average:lx} come from the luminaires alone; {targetLux:lx} are wanted. Use fewer or weaker luminaires, or dim them.',
+  'finding.point-under-minimum.title': 'Darkest point too dark',
+  'finding.point-under-minimum.body':
+    'The darkest point has {minimum:lx}; {minimumLux:lx} are the least. Move luminaires closer together or towards the walls.',
+  'finding.point-uneven.title': 'Light too uneven',
+  'finding.point-uneven.body':
+    'Darkest point over average is {uniformity}; {minimumUniformity} is wanted. Use more, weaker luminaires closer together, or a wider beam.',
 } as const;
 
 export const photometryWorking = {
@@ -46,4 +76,9 @@ export const photometryWorking = {
   'working.photometry-uplight': 'Share of the light above the horizontal',
   'working.photometry-beam': 'Beam angle',
   'working.photometry-efficacy': 'Efficacy',
+  'working.point-grid-step': 'Largest step of the grid',
+  'working.point-grid-points': 'Points',
+  'working.point-brightest': 'Illuminance at the brightest point',
+  'working.point-average': 'Average illuminance',
+  'working.point-uniformity': 'Uniformity',
 } as const;
