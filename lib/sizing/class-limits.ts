@@ -34,7 +34,8 @@ const BARE_DRY_VOLTS = 60;
 const BARE_WET_VOLTS = 30;
 
 export const CLASS_LIMIT_BASIS = `${CLASS_TWO_BASIS}, 411.3 and 411.6`;
-export const SELV_BASIS = 'IEC 60364-4-41 414 and IEC 60364-7-715, SELV (from memory)';
+export const SELV_BASIS =
+  'IEC 61140:2016, ELV to 120 V DC; IEC 60598-1:2008 8.2.3, bare parts 60 V DC, 30 V other than dry (read in extracts)';
 
 /** Highest volts that Class 2 and Article 411 take here, V DC. */
 export function usLowVolts(wet: boolean): number {

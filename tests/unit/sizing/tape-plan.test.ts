@@ -84,7 +84,167 @@ describe('what stops a plan', () => {
   });
   it('is not there where there is a plan', () => {
     expect(plan().findings.filter(({ severity }) => severity === 'stop')).toEqual([]);
+  });
+});
+
+/** Each finding: a job that raises it, and one like it that does not. */
+const [cove] = example.runs as [TapePlanInput['runs'][number]];
+const [single] = example.drivers as [TapePlanInput['drivers'][number]];
+const unmarked = { ...single, sku: 'N-60', classLimited: false };
+const strong = { ...unmarked, sku: 'N-700', channelWatts: 700 };
+const thick = { size: 'AWG 8', stranding: 'stranded' as const, costPerMetre: 6, amps: 50 };
+const iec = { basis: 'iec' as const, drivers: [{ ...single, selv: true }] };
+const tape = (change: Partial<TapePlanInput['tape']>) => ({ ...example.tape, ...change });
+const limits = (change: Partial<TapePlanInput['limits']>) => ({ ...example.limits, ...change });
+const at = (volts: number, change: Partial<TapePlanInput['drivers'][number]> = {}) => ({
+  tape: tape({ volts }),
+  drivers: [{ ...single, volts, ...change }],
+});
+
+const RAISED: [
+  code: string,
+  severity: string,
+  hard: boolean,
+  raises: Partial<TapePlanInput>,
+  not: Partial<TapePlanInput>,
+][] = [
+  ['no-driver-of-these-volts', 'stop', false, { drivers: [{ ...single, volts: 12 }] }, { drivers: [single] }],
+  ['no-selv-driver', 'stop', true, { basis: 'iec', drivers: [single] }, iec],
+  [
+    'no-class-limited-driver',
+    'stop',
+    true,
+    { tape: tape({ classLimitedOnly: true }), drivers: [unmarked] },
+    { tape: tape({ classLimitedOnly: true }) },
+  ],
+  [
+    'no-class-limited-driver',
+    'stop',
+    true,
+    { drivers: [{ ...single, channelWatts: 120 }] },
+    { drivers: [{ ...single, channelWatts: 100 }] },
+  ],
+  ['tape-volts-over-class', 'stop', true, { ...at(36), wet: true }, at(36)],
+  [
+    'tape-volts-over-class',
+    'stop',
+    true,
+    { ...iec, ...at(61, { selv: true }) },
+    { ...iec, ...at(61, { selv: true }), insulated: true },
+  ],
+  [
+    'tape-volts-over-class',
+    'stop',
+    true,
+    { ...iec, ...at(121, { selv: true }), insulated: true },
+    { ...iec, ...at(120, { selv: true }), insulated: true },
+  ],
+  [
+    'plan-longest-run',
+    'stop',
+    false,
+    { limits: limits({ longestRunMetres: 5, maxSections: 1 }) },
+    { limits: limits({ longestRunMetres: 5, maxSections: 2 }) },
+  ],
+  [
+    'plan-no-driver-large-enough',
+    'stop',
+    false,
+    { drivers: [single], limits: limits({ maxSections: 1 }) },
+    { drivers: [single], limits: limits({ maxSections: 2 }) },
+  ],
+  [
+    'plan-drop-too-high',
+    'stop',
+    false,
+    { limits: limits({ maxDropPct: 0.1, maxSections: 2 }) },
+    { limits: limits({ maxDropPct: 5, maxSections: 2 }) },
+  ],
+  [
+    'plan-too-dim',
+    'stop',
+    false,
+    {
+      tape: tape({ load: { model: 'resistive', ohms: 1200 } }),
+      limits: limits({ minDimmestPct: 99.99, maxSections: 2 }),
+    },
+    {
+      tape: tape({ load: { model: 'resistive', ohms: 1200 } }),
+      limits: limits({ minDimmestPct: 90, maxSections: 2 }),
+    },
+  ],
+  [
+    'plan-feeder-too-small',
+    'stop',
+    true,
+    { drivers: [strong] },
+    { drivers: [strong], conductors: [thick], runs: [cove] },
+  ],
+  [
+    'class-two-mark-contradicted',
+    'caution',
+    false,
+    { drivers: [single, { ...single, sku: 'X', channelWatts: 101 }] },
+    { drivers: [single, { ...single, sku: 'X', channelWatts: 100 }] },
+  ],
+  [
+    'drivers-of-other-volts',
+    'note',
+    false,
+    { drivers: [single, { ...single, sku: 'X', volts: 12 }] },
+    { drivers: [single] },
+  ],
+  [
+    'drivers-outside-class',
+    'note',
+    false,
+    { tape: tape({ classLimitedOnly: true }), drivers: [single, unmarked] },
+    { drivers: [single, unmarked] },
+  ],
+  [
+    'plan-chapter-3',
+    'caution',
+    false,
+    { drivers: [strong], conductors: [thick], runs: [cove] },
+    { drivers: [{ ...strong, channelWatts: 600 }], conductors: [thick], runs: [cove] },
+  ],
+  ['plan-article-411', 'note', false, { drivers: [unmarked] }, { drivers: [single] }],
+  ['plan-feeder-rating-from-table', 'note', false, {}, { runs: [cove] }],
+  ['plan-separate-sections', 'caution', false, { limits: limits({ longestRunMetres: 5 }) }, {}],
+  [
+    'plan-drop-governs',
+    'note',
+    false,
+    {
+      runs: [
+        { ...cove, places: [{ place: 'closet', startMetres: 20 }], pinned: { sections: 1, feed: 'both' } },
+      ],
+    },
+    { runs: [cove] },
+  ],
+  ['plan-run-ends-short', 'note', false, { runs: [{ ...cove, metres: 7.52 }] }, { runs: [cove] }],
+];
+
+describe('findings', () => {
+  it.each(RAISED)('%s is raised where it should be, and only there', (code, severity, hard, raises, not) => {
+    const found = plan(raises).findings.find((own) => own.code === code);
+    expect(found).toMatchObject({ severity, hard });
+    expect(codes(not)).not.toContain(code);
+  });
+
+  it('plan-bound-open is raised where the search ends early, and the plan still stands', () => {
+    const large = runCalculation(tapePlanCalculation, randomJob(5, { runs: 40 }));
+    expect(large.result.boundPct).toBeGreaterThan(0);
+    expect(large.findings.map(({ code }) => code)).toContain('plan-bound-open');
     expect(codes()).not.toContain('plan-bound-open');
+  });
+
+  it('feeders behind a driver that is not limited carry its rating', () => {
+    const size = (drivers: TapePlanInput['drivers']) =>
+      plan({ drivers, runs: [{ ...cove, metres: 1 }] }).result.runs?.[0]?.sections[0]?.size;
+    expect(size([{ ...single, channelWatts: 96 }])).toBe('AWG 18');
+    // 200 W at 24 V are 8.3 A: more than the 7 A of the AWG 18 offered.
+    expect(size([{ ...unmarked, channelWatts: 200 }])).toBe('AWG 16');
   });
 });
 
