@@ -15,6 +15,8 @@ const HEAVY = new Set([
   'tape-plan',
   'fault-finder',
   'series-string',
+  'point-illuminance',
+  'photometric-file',
   'branch-circuit',
 ]);
 const SECONDS = 2;

@@ -53,13 +53,34 @@ type FigureSettings = Pick<ShopSettings, 'units'> & Partial<Pick<ShopSettings, '
 /** Spelling of units that need no conversion. */
 const SPELLED: Readonly<Record<string, string>> = { mm2: 'mm²', m2: 'm²' };
 
+/** One lumen a square foot. */
+export const LUX_PER_FOOTCANDLE = 1 / 0.3048 ** 2;
+
+function illuminance(lux: number, settings: FigureSettings): Figure {
+  if (settings.units !== 'us') return { value: formatNumber(lux, 0), unit: 'lx' };
+  const footcandles = lux / LUX_PER_FOOTCANDLE;
+  return { value: formatNumber(footcandles, footcandles < 10 ? 1 : 0), unit: 'fc' };
+}
+
+/** Saturation currents lie eighteen decades under an amp: a power of ten, where no prefix helps. */
+const LEAST_PREFIXED_AMPS = 1e-9;
+const powerOfTen = (value: number): string => {
+  const [digits = '0', exponent = '0'] = value.toExponential(2).split('e');
+  return `${digits} × 10^${Number(exponent)}`;
+};
+
 /** A figure in an engine unit (`V`, `A`, `W`, `ohm`, `m`, `C`, `%`, `minor`, …) as the shop shows it. */
 export function formatFigure(value: number, unit: string, settings: FigureSettings): Figure {
   if (!Number.isFinite(value)) return { value: '–', unit: SPELLED[unit] ?? unit };
   switch (unit) {
     case 'V':
       return { value: formatNumber(value, 2), unit: 'V' };
+    case 'lx':
+      return illuminance(value, settings);
     case 'A':
+      if (value !== 0 && Math.abs(value) < LEAST_PREFIXED_AMPS)
+        return { value: powerOfTen(value), unit: 'A' };
+      return withPrefix(value, unit);
     case 'W':
       return withPrefix(value, unit);
     case '%':

@@ -1,27 +1,23 @@
 /** Illuminance: stored in lux, typed and shown in footcandles where a shop works in feet. */
-import { formatNumber } from './figures';
+import { formatFigure, LUX_PER_FOOTCANDLE } from './figures';
 import { parseNumber } from './parse-figures';
 import { type Parsed, parsed, unread } from './parsed';
 import type { ShopSettings } from './settings';
 
 type LightSettings = Pick<ShopSettings, 'units'>;
 
-/** One lumen a square foot. */
-const LUX_PER_FOOTCANDLE = 1 / 0.3048 ** 2;
-
 const perUnit = (settings: LightSettings) => (settings.units === 'us' ? LUX_PER_FOOTCANDLE : 1);
 
 export const illuminanceUnit = (settings: LightSettings): string => (settings.units === 'us' ? 'fc' : 'lx');
 
 /** The figure alone: whole lux, footcandles to a tenth under ten. */
-export function illuminanceFigure(lux: number, settings: LightSettings): string {
-  if (!Number.isFinite(lux)) return '–';
-  const value = lux / perUnit(settings);
-  return formatNumber(value, settings.units === 'us' && value < 10 ? 1 : 0);
-}
+export const illuminanceFigure = (lux: number, settings: LightSettings): string =>
+  formatFigure(lux, 'lx', settings).value;
 
-export const formatIlluminance = (lux: number, settings: LightSettings): string =>
-  `${illuminanceFigure(lux, settings)} ${illuminanceUnit(settings)}`;
+export function formatIlluminance(lux: number, settings: LightSettings): string {
+  const { value, unit } = formatFigure(lux, 'lx', settings);
+  return `${value} ${unit}`;
+}
 
 /** Reads a bare number in the shop's unit, or one that names lx, lux or fc itself. */
 export function parseIlluminance(text: string, settings: LightSettings): Parsed<number> {

@@ -4,6 +4,7 @@ import { cpus } from 'node:os';
 import { benchBrowserSize } from './browser-size';
 import { benchLadder } from './ladder';
 import { calibration, type Row } from './row';
+import { benchTapePlan } from './tape-plan';
 
 const figure = (value: number) =>
   Math.abs(value) >= 0.001 || value === 0 ? value.toPrecision(4) : value.toExponential(2);
@@ -17,7 +18,7 @@ function show({ what, value, unit, target, ok }: Row): void {
 
 async function main(): Promise<void> {
   const rows: Row[] = [];
-  for (const bench of [() => [calibration()], benchLadder, benchBrowserSize]) {
+  for (const bench of [() => [calibration()], benchLadder, benchTapePlan, benchBrowserSize]) {
     const measured = await bench();
     measured.forEach(show);
     rows.push(...measured);

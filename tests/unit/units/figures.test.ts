@@ -144,3 +144,8 @@ describe('parsers', () => {
         expect(value(parseWireSize(formatWireSize(size), settings))).toBe(size);
   });
 });
+
+it('shows a saturation current as a power of ten', () => {
+  expect(formatFigure(2.34e-18, 'A', US)).toEqual({ value: '2.34 × 10^-18', unit: 'A' });
+  expect(formatFigure(0, 'A', US).value).toBe('0');
+});

@@ -1,6 +1,12 @@
 /** Light levels in the shop's unit, typed and shown. */
 import { describe, expect, it } from 'vitest';
-import { DEFAULT_SETTINGS, formatIlluminance, illuminanceFigure, parseIlluminance } from '@/lib/units';
+import {
+  DEFAULT_SETTINGS,
+  formatFigure,
+  formatIlluminance,
+  illuminanceFigure,
+  parseIlluminance,
+} from '@/lib/units';
 
 const US = DEFAULT_SETTINGS;
 const METRIC = { ...DEFAULT_SETTINGS, units: 'metric' } as const;
@@ -32,5 +38,6 @@ describe('illuminance', () => {
     expect(formatIlluminance(500, US)).toBe('46 fc');
     expect(formatIlluminance(54, US)).toBe('5.0 fc');
     expect(illuminanceFigure(NaN, US)).toBe('–');
+    expect(formatFigure(500, 'lx', US)).toEqual({ value: '46', unit: 'fc' });
   });
 });
