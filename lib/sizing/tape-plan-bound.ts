@@ -5,7 +5,7 @@
  * must be or may be used what it costs above the worth of its channels. True for any prices at all; good prices come
  * from a linear program (tape-plan-prices.ts).
  */
-import type { Choices, Option } from './tape-plan-choices';
+import type { Choices, Option, Section, Spot } from './tape-plan-choices';
 import { type Kinds, Knapsack } from './tape-plan-knapsack';
 
 /** Price of a section by site and cuts. */
@@ -51,19 +51,28 @@ export function kindOf({ cuts }: Kinds, own: number): number {
   return low;
 }
 
-/** Cheapest spot of every section at the prices, and what the option costs so. */
-export function pricedOption({ sections }: Option, prices: Prices): { cost: number; chosen: number[] } {
+/** What an option costs at the prices, each section at its cheapest spot. Called most of all: plain loops. */
+export function pricedOption({ sections }: Option, prices: Prices): number {
   let cost = 0;
-  const chosen = sections.map(({ cuts, spots }) => {
-    let [least, at] = [Infinity, 0];
-    spots.forEach(({ site, variant }, i) => {
-      const own = variant.cost + (prices[site]?.[cuts] ?? 0);
-      if (own < least) [least, at] = [own, i];
-    });
+  for (let j = 0; j < sections.length; j++) {
+    const { cuts, spots } = sections[j] as Section;
+    let least = Infinity;
+    for (let i = 0; i < spots.length; i++) {
+      const { site, variant } = spots[i] as Spot;
+      const own = variant.cost + ((prices[site] as Float64Array)[cuts] ?? 0);
+      if (own < least) least = own;
+    }
     cost += least;
-    return at;
+  }
+  return cost;
+}
+
+/** Those spots, by index. */
+function cheapestSpots({ sections }: Option, prices: Prices): number[] {
+  return sections.map(({ cuts, spots }) => {
+    const priced = spots.map(({ site, variant }) => variant.cost + (prices[site]?.[cuts] ?? 0));
+    return priced.indexOf(Math.min(...priced));
   });
-  return { cost, chosen };
 }
 
 /** Prices by cuts out of prices by kind: a section between two kinds is priced as the smaller. */
@@ -99,10 +108,11 @@ function cheapestOption(options: readonly Option[], left: readonly number[], pri
   let best: PricedRun = { cost: Infinity, option: -1, spots: [] };
   for (const option of left) {
     const own = options[option];
-    const priced = own && pricedOption(own, prices);
-    if (priced && priced.cost < best.cost) best = { cost: priced.cost, option, spots: priced.chosen };
+    const cost = own ? pricedOption(own, prices) : Infinity;
+    if (cost < best.cost) best = { cost, option, spots: [] };
   }
-  return best;
+  const own = options[best.option];
+  return own ? { ...best, spots: cheapestSpots(own, prices) } : best;
 }
 
 /** One knapsack a site, wide enough for its largest channel. */

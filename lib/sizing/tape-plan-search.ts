@@ -117,7 +117,7 @@ class Search {
     const byRun = this.choices.runs.map(({ options }, r) => {
       const all = (region.options[r] ?? []).map((option): Choice => {
         const own = options[option] as Option;
-        const extra = pricedOption(own, bound.prices).cost - (bound.runs[r]?.cost ?? 0);
+        const extra = pricedOption(own, bound.prices) - (bound.runs[r]?.cost ?? 0);
         return { option, cost: own.leastCost, extra };
       });
       const share = ({ option }: Choice) => shares?.[r]?.[option] ?? 0;
