@@ -6,9 +6,9 @@ import { HowFigured } from '@/components/findings/how-figured';
 import { OverrideStop } from '@/components/findings/override-stop';
 import { Button } from '@/components/ui/button';
 import { type Answer, EngineError } from '@/lib/engine/contract';
-import { calculations } from '@/lib/engine/registry';
 import { runCalculation } from '@/lib/engine/run';
 import { ACTIONS, type ChangeElectrical, type ChangeLine } from '@/lib/surveys/schema';
+import { retrofitCheckCalculation } from '@/lib/sizing/retrofit-check';
 import { retrofitInput } from '@/lib/surveys/schema/retrofit-input';
 import { Counter } from './counter';
 import { ChoiceField } from './fields';
@@ -43,13 +43,13 @@ const UNDECIDED: ChangeElectrical = {
 };
 
 function check(line: ChangeLine, survey: Survey): Answer | null {
-  const calculation = calculations.get('retrofit-check');
-  if (!calculation || line.circuitId !== null) return null;
+  if (line.circuitId !== null) return null;
   const existing = survey.luminaires.find((one) => one.id === line.existingLuminaireId)?.data ?? null;
   const part = survey.extra?.parts.find((one) => one.id === line.newPartId) ?? null;
   const hazards = survey.areas.find((one) => one.id === line.areaId)?.data.hazards ?? {};
   try {
-    return runCalculation(calculation, retrofitInput(line, { existing, part, hazards }, survey.settings));
+    const input = retrofitInput(line, { existing, part, hazards }, survey.settings);
+    return runCalculation(retrofitCheckCalculation, input);
   } catch (error) {
     if (error instanceof EngineError) return null;
     throw error;

@@ -1,8 +1,8 @@
 /** A change line on an existing circuit goes through the engine's retrofit check. */
 import { Area, ExistingLuminaire, Part } from '@/models';
 import { type Answer, EngineError } from '@/lib/engine/contract';
-import { calculations } from '@/lib/engine/registry';
 import { runCalculation } from '@/lib/engine/run';
+import { retrofitCheckCalculation } from '@/lib/sizing/retrofit-check';
 import { currentShopId } from '@/lib/platform/db';
 import { getSettings } from '@/lib/shops/queries';
 import { type RetrofitFacts, retrofitInput } from './schema/retrofit-input';
@@ -36,11 +36,9 @@ export async function checkChangeLine(
   line: ChangeLine,
 ): Promise<{ engineInput: Record<string, unknown>; answer: Answer | null } | null> {
   if (line.circuitId !== null) return null;
-  const calculation = calculations.get('retrofit-check');
-  if (!calculation) return null;
   const engineInput = retrofitInput(line, await factsOf(line), await getSettings(currentShopId()));
   try {
-    return { engineInput, answer: runCalculation(calculation, engineInput) };
+    return { engineInput, answer: runCalculation(retrofitCheckCalculation, engineInput) };
   } catch (error) {
     if (error instanceof EngineError) return { engineInput, answer: null };
     throw error;

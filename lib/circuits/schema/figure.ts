@@ -7,15 +7,18 @@ import {
   type Answer,
   atLeast,
   atMost,
+  type Calculation,
   EngineError,
   type EngineIssue,
   type Finding,
   ceilWithin,
 } from '@/lib/engine/contract';
-import { calculations } from '@/lib/engine/registry';
 import { runCalculation, toIssues } from '@/lib/engine/run';
+import { branchCircuitCalculation } from '@/lib/sizing/branch-circuit';
 import { conductorResistance } from '@/lib/sizing/conductor-resistance';
+import { resistorArrayCalculation } from '@/lib/sizing/resistor-array';
 import { classTwoLimitAmps } from '@/lib/sizing/tables/nec-ampacity';
+import { tapeAnalysisCalculation } from '@/lib/sizing/tape-analysis';
 import type { ShopSettings } from '@/lib/units/settings';
 import {
   type BranchCircuit,
@@ -29,10 +32,11 @@ export type Figured =
   | { ok: true; engineInput: Record<string, unknown>; answer: Answer }
   | { ok: false; code: string; message: string; issues: EngineIssue[] };
 
-const CALCULATION: Record<CircuitKind, string> = {
-  'tape-run': 'tape-analysis',
-  'branch-circuit': 'branch-circuit',
-  'resistor-array': 'resistor-array',
+/** Named one by one: the registry would bring every calculation there is to the phone. */
+const CALCULATION: Record<CircuitKind, Calculation> = {
+  'tape-run': tapeAnalysisCalculation as unknown as Calculation,
+  'branch-circuit': branchCircuitCalculation as unknown as Calculation,
+  'resistor-array': resistorArrayCalculation as unknown as Calculation,
 };
 
 const refusal = (path: string, message: string) =>
@@ -209,11 +213,8 @@ export function figureCircuit(kind: CircuitKind, electrical: unknown, settings: 
     return { ok: false, code: 'invalid-input', message: 'Some figures need another look.', issues };
   }
   try {
-    const calculation = calculations.get(CALCULATION[kind]);
-    if (!calculation)
-      throw new EngineError('unknown-calculation', 'This kind of circuit can not be figured yet.');
     const engineInput = inputOf(kind, parsed.data, settings);
-    const answer = runCalculation(calculation, engineInput);
+    const answer = runCalculation(CALCULATION[kind], engineInput);
     const own = kind === 'tape-run' ? tapeFindings(parsed.data as TapeRun, answer.result as TapeResult) : [];
     return { ok: true, engineInput, answer: { ...answer, findings: [...own, ...answer.findings] } };
   } catch (error) {
