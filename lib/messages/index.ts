@@ -10,6 +10,7 @@ import { benchAndBusFindings, benchAndBusWorking } from './en/findings-bench-and
 import { circuitFindings } from './en/findings-circuits';
 import { constantCurrentFindings } from './en/findings-constant-current';
 import { photometryFindings, photometryWorking } from './en/findings-photometry';
+import { faultFinderFindings, faultFinderWorking } from './en/findings-fault-finder';
 import { retrofitFindings } from './en/findings-retrofit';
 import { tapePlanFindings } from './en/findings-tape-plan';
 import { jobs } from './en/jobs';
@@ -38,6 +39,8 @@ const catalogue = catalogueOf({
   ...benchAndBusWorking,
   ...photometryFindings,
   ...photometryWorking,
+  ...faultFinderFindings,
+  ...faultFinderWorking,
   ...retrofitFindings,
   ...tapePlanFindings,
   ...labels,

@@ -7,6 +7,7 @@ import { conductorResistanceCalculation } from './conductor-resistance';
 import { conductorSizeCalculation } from './conductor-size';
 import { currentSinkCalculation } from './current-sink';
 import { dimmingBusCalculation } from './dimming-bus';
+import { faultFinderCalculation } from './fault-finder';
 import { ledFitCalculation } from './led-fit';
 import { linearCurrentSourceCalculation } from './linear-current-source';
 import { resistorArrayCalculation } from './resistor-array';
@@ -33,5 +34,6 @@ export const sizingCalculations = [
   branchCircuitCalculation,
   dimmingBusCalculation,
   ledFitCalculation,
+  faultFinderCalculation,
   retrofitCheckCalculation,
 ] as unknown as Calculation[];

@@ -195,6 +195,25 @@ export const EXAMPLES: Readonly<Record<string, Record<string, unknown>>> = {
     celsius: 25,
     workingAmps: 0.02,
   },
+  'fault-finder': {
+    circuit: {
+      kind: 'tape',
+      input: {
+        cuts: 20,
+        cutMetres: 0.05,
+        railOhmsPerMetre: { positive: 0.1, negative: 0.1 },
+        load: { model: 'led-string', leds: 7, ballastOhms: 60, ...diode, emissionCoefficient: 2.6 },
+        feeds: [{ at: 0, volts: 24, positiveOhms: 0.1, negativeOhms: 0.1 }],
+      },
+    },
+    tolerances: { supplyPct: 3, workingCelsius: 60 },
+    meter: { ampsPct: 2 },
+    readings: [
+      { at: 'feed', index: 1, volts: 24.1 },
+      { at: 'cut', index: 2, volts: 23.8 },
+      { at: 'cut', index: 20, volts: 20.4 },
+    ],
+  },
   'retrofit-check': {
     basis: 'us',
     action: 'bypass',

@@ -1,0 +1,174 @@
+/**
+ * How well a cause explains the readings. Differences are taken in units of the meter's error, and what a tolerance
+ * may explain is not held against a cause: generalised least squares, with the covariance of the readings
+ * C = diag(meter error squared) + sum over tolerances of s * s' / 3, s being what one tolerance moves the readings by
+ * (a third of the square of the half width is the variance of anything between the two ends).
+ */
+import { EngineError } from '@/lib/engine/contract';
+import { growingRow, lowest, lowestWhole } from './fault-finder-minimum';
+import type { Family, Quantity, Reading, Solved } from './fault-finder-model';
+
+/** Causes whose scores differ by less (three sigma) are not told apart. */
+export const TOLD_APART = 9;
+/** Akaike's price of a figure or a place that was fitted: what fits as well with less comes first. */
+const PRICE = 2;
+/** In ln of the figure: a thousandth. */
+const LOG_WIDTH = 1e-3;
+const LINEAR_WIDTH = 1e-4;
+
+export interface MeterPct {
+  volts: number;
+  amps: number;
+}
+
+/** Meter's error, V or A; near nought a tenth of what the circuit should give there counts. */
+export function meterError(meter: MeterPct, { quantity }: Quantity, read: number, expected: number): number {
+  return (meter[quantity] / 100) * Math.max(Math.abs(read), Math.abs(expected) / 10, 1e-9);
+}
+
+/** Square root of a symmetric matrix from below: C = L * L'. */
+function cholesky(C: readonly (readonly number[])[]): number[][] {
+  const L: number[][] = [];
+  C.forEach((row, i) => {
+    const own: number[] = [];
+    for (let j = 0; j <= i; j++) {
+      let left = row[j] ?? 0;
+      for (let k = 0; k < j; k++) left -= (own[k] ?? 0) * (L[j]?.[k] ?? 0);
+      own.push(j === i ? Math.sqrt(Math.max(left, 1e-12 * (row[i] ?? 0))) : left / (L[j]?.[j] ?? 1));
+    }
+    L.push(own);
+  });
+  return L;
+}
+
+export class Weighed {
+  private readonly L: number[][];
+
+  /**
+   * @param errors of the meter, one a reading
+   * @param moved what each tolerance moves each reading by
+   */
+  constructor(
+    readonly readings: readonly Reading[],
+    errors: readonly number[],
+    moved: readonly (readonly number[])[],
+  ) {
+    const C = errors.map((error, i) =>
+      errors.map((_, j) => {
+        const tolerances = moved.reduce((sum, s) => sum + ((s[i] ?? 0) * (s[j] ?? 0)) / 3, 0);
+        return tolerances + (i === j ? error * error : 0);
+      }),
+    );
+    this.L = cholesky(C);
+  }
+
+  /** Sum of squares of what the readings are off; Infinity where the circuit gives no figure. */
+  misfit(solved: Solved): number {
+    const off: number[] = [];
+    let sum = 0;
+    this.readings.forEach((reading, i) => {
+      let left = reading.measured - solved.read(reading);
+      for (let j = 0; j < i; j++) left -= (this.L[i]?.[j] ?? 0) * (off[j] ?? 0);
+      const own = left / (this.L[i]?.[i] ?? 1);
+      off.push(own);
+      sum += own * own;
+    });
+    return Number.isFinite(sum) ? sum : Infinity;
+  }
+}
+
+export interface Fit {
+  family: Family;
+  /** 0 where the cause has no place. */
+  place: number;
+  value: number;
+  solved: Solved;
+  misfit: number;
+  /** Misfit with the price of what was fitted, and how unlikely that is beforehand. */
+  score: number;
+}
+
+/** null where the circuit has no operating point with this fault. */
+function trySolve(family: Family, place: number, value: number): Solved | null {
+  try {
+    return family.solve(place, value);
+  } catch (error) {
+    if (error instanceof EngineError && error.code === 'no-solution') return null;
+    throw error;
+  }
+}
+
+function bestValue(family: Family, place: number, misfitAt: (value: number) => number): number {
+  const { parameter } = family;
+  if (!parameter) return 0;
+  const { low, high, scale } = parameter;
+  if (scale === 'whole') return lowestWhole(misfitAt, growingRow(low, high)).at;
+  if (scale === 'linear') return lowest(misfitAt, low, high, LINEAR_WIDTH * (high - low)).at;
+  return Math.exp(lowest((ln) => misfitAt(Math.exp(ln)), Math.log(low), Math.log(high), LOG_WIDTH).at);
+}
+
+/** The figure that explains the readings best, with the fault at this place. */
+export function fitAt(family: Family, weighed: Weighed, place: number): Fit | null {
+  const misfitAt = (value: number) => {
+    const solved = trySolve(family, place, value);
+    return solved ? weighed.misfit(solved) : Infinity;
+  };
+  const value = bestValue(family, place, misfitAt);
+  const solved = trySolve(family, place, value);
+  if (!solved) return null;
+  const misfit = weighed.misfit(solved);
+  if (misfit === Infinity) return null;
+  const fitted = (family.parameter ? 1 : 0) + ((family.grid?.length ?? 0) > 1 ? 1 : 0);
+  return {
+    family,
+    place,
+    value,
+    solved,
+    misfit,
+    score: misfit + PRICE * fitted + (family.surprise?.(value) ?? 0),
+  };
+}
+
+/** Fits at places, each only once. */
+export class Places {
+  private readonly fits = new Map<number, Fit | null>();
+
+  constructor(
+    readonly family: Family,
+    private readonly weighed: Weighed,
+  ) {}
+
+  at(place: number): Fit | null {
+    const known = this.fits.get(place);
+    if (known !== undefined) return known;
+    const fit = fitAt(this.family, this.weighed, place);
+    this.fits.set(place, fit);
+    return fit;
+  }
+
+  score = (place: number): number => this.at(place)?.score ?? Infinity;
+
+  best(): Fit | null {
+    const { grid } = this.family;
+    if (!grid) return this.at(0);
+    return this.at(lowestWhole(this.score, grid).at);
+  }
+
+  /** The furthest places on either side that explain the readings nearly as well. */
+  range(best: Fit): { from: number; to: number } | null {
+    const { grid } = this.family;
+    if (!grid) return null;
+    const edge = (good: number, end: number): number => {
+      const explains = (place: number) => this.score(place) - best.score < TOLD_APART;
+      if (explains(end)) return end;
+      let [near, far] = [good, end];
+      while (Math.abs(far - near) > 1) {
+        const middle = Math.trunc((near + far) / 2);
+        if (explains(middle)) near = middle;
+        else far = middle;
+      }
+      return near;
+    };
+    return { from: edge(best.place, grid[0] ?? best.place), to: edge(best.place, grid.at(-1) ?? best.place) };
+  }
+}

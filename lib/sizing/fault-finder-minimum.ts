@@ -1,0 +1,88 @@
+/** Lowest point of a figure of one variable. */
+
+export interface Minimum {
+  at: number;
+  least: number;
+}
+
+const GOLDEN = (3 - Math.sqrt(5)) / 2;
+const GRID = 8;
+const MAX_STEPS = 40;
+
+/** Vertex of the parabola through three points; NaN where they lie on a line or one has no figure. */
+function vertex(a: Minimum, b: Minimum, c: Minimum): number {
+  const ab = (b.at - a.at) * (b.least - c.least);
+  const cb = (b.at - c.at) * (b.least - a.least);
+  return b.at - ((b.at - a.at) * ab - (b.at - c.at) * cb) / (2 * (ab - cb));
+}
+
+/**
+ * Between `low` and `high`: the lowest of a coarse row of points, then steps to the vertex of the parabola through
+ * the three best, or by the golden section where that leads nowhere.
+ * @param figure may be Infinity where there is none
+ * @param width how near the place is wanted
+ */
+export function lowest(figure: (x: number) => number, low: number, high: number, width: number): Minimum {
+  const row = Array.from({ length: GRID + 1 }, (_, i): Minimum => {
+    const at = low + ((high - low) * i) / GRID;
+    return { at, least: figure(at) };
+  });
+  const i = row.reduce((best, { least }, n) => (least < (row[best]?.least ?? Infinity) ? n : best), 0);
+  let best = row[i] as Minimum;
+  let left = row[Math.max(0, i - 1)] as Minimum;
+  let right = row[Math.min(GRID, i + 1)] as Minimum;
+  for (let step = 0; step < MAX_STEPS && right.at - left.at > width; step++) {
+    let at = step % 3 === 2 ? NaN : vertex(left, best, right);
+    const inside = at > left.at && at < right.at && Math.abs(at - best.at) > width / 4;
+    if (!inside) {
+      const wider = best.at - left.at > right.at - best.at ? left : right;
+      at = best.at + GOLDEN * (wider.at - best.at);
+    }
+    const next = { at, least: figure(at) };
+    if (next.least < best.least) {
+      if (at < best.at) right = best;
+      else left = best;
+      best = next;
+    } else if (at < best.at) left = next;
+    else right = next;
+  }
+  return best;
+}
+
+/** Among whole numbers: the lowest of `grid` (sorted), then halving on both sides of it. */
+export function lowestWhole(figure: (x: number) => number, grid: readonly number[]): Minimum {
+  const known = new Map<number, number>();
+  const of = (at: number): Minimum => {
+    const least = known.get(at) ?? figure(at);
+    known.set(at, least);
+    return { at, least };
+  };
+  const row = grid.map(of);
+  const i = row.reduce((best, { least }, n) => (least < (row[best]?.least ?? Infinity) ? n : best), 0);
+  let best = row[i] as Minimum;
+  let left = row[Math.max(0, i - 1)]?.at ?? best.at;
+  let right = row[Math.min(row.length - 1, i + 1)]?.at ?? best.at;
+  while (best.at - left > 1 || right - best.at > 1) {
+    const before = of(Math.floor((left + best.at) / 2));
+    const after = of(Math.ceil((best.at + right) / 2));
+    if (before.least < best.least) {
+      right = best.at;
+      best = before;
+    } else if (after.least < best.least) {
+      left = best.at;
+      best = after;
+    } else {
+      left = before.at;
+      right = after.at;
+    }
+  }
+  return best;
+}
+
+/** 1, 2, 3, 5, 8 ... and the last: a row that finds one valley among many whole numbers. */
+export function growingRow(low: number, high: number): number[] {
+  const row = [low];
+  for (let [a, b] = [1, 1]; low + b < high; [a, b] = [b, a + b]) row.push(low + b);
+  if (high > low) row.push(high);
+  return [...new Set(row)];
+}
