@@ -16,6 +16,8 @@ export interface Region {
   /** Least and most drivers of each bin. */
   least: number[];
   most: number[];
+  /** The same of each driver type over all places: what one place saves, another may buy. */
+  total: { least: number[]; most: number[] };
   /** Options left of each run, by index. */
   options: number[][];
 }
@@ -29,6 +31,8 @@ export interface PricedRun {
 
 export interface Bound {
   cost: number;
+  /** The same without what the totals of driver types add. */
+  looseCost: number;
   prices: Prices;
   runs: PricedRun[];
   /** Of each site: most that one channel is worth by its room. */
@@ -104,6 +108,32 @@ export function grantedCost(
   return number === Infinity ? 0 : number * own;
 }
 
+/** What drivers of a type cost at least above their channels' worth, over all places; Infinity where they can't be. */
+function grantedTotal(
+  driverCosts: readonly number[],
+  { least, most, total }: Region,
+  own: readonly number[],
+  type: number,
+): number {
+  const sorted = [...own].sort((a, b) => (driverCosts[a] ?? 0) - (driverCosts[b] ?? 0));
+  let cost = 0;
+  let number = 0;
+  for (const b of sorted) {
+    cost += (least[b] ?? 0) * (driverCosts[b] ?? 0);
+    number += least[b] ?? 0;
+  }
+  for (const b of sorted) {
+    const each = driverCosts[b] ?? 0;
+    const until = each < 0 ? (total.most[type] ?? 0) : (total.least[type] ?? 0);
+    const more = Math.min((most[b] ?? 0) - (least[b] ?? 0), until - number);
+    // Without a most number no driver is worth more than it costs: nothing to gain.
+    if (more <= 0 || more === Infinity) continue;
+    cost += more * each;
+    number += more;
+  }
+  return number < (total.least[type] ?? 0) || number > (total.most[type] ?? 0) ? Infinity : cost;
+}
+
 function cheapestOption(options: readonly Option[], left: readonly number[], prices: Prices): PricedRun {
   let best: PricedRun = { cost: Infinity, option: -1, spots: [] };
   for (const option of left) {
@@ -119,7 +149,7 @@ function cheapestOption(options: readonly Option[], left: readonly number[], pri
 function knapsacksOf({ bins }: Choices, kinds: readonly Kinds[], prices: Prices): Knapsack[] {
   return kinds.map((own, site) => {
     const room = bins.reduce((most, bin) => (bin.site === site ? Math.max(most, bin.cuts) : most), 0);
-    return new Knapsack(room, own, (cuts) => prices[site]?.[cuts] ?? 0);
+    return new Knapsack(room, own, (kind) => prices[site]?.[own.cuts[kind] ?? 0] ?? 0);
   });
 }
 
@@ -138,9 +168,14 @@ export function boundOf(choices: Choices, kinds: readonly Kinds[], region: Regio
   const worth = knapsacks.map((own) => (share < 1 ? own.worth.map((one) => one * share) : own.worth));
   const runs = choices.runs.map(({ options }, r) => cheapestOption(options, region.options[r] ?? [], scaled));
   const driverCosts = choices.bins.map((bin) => bin.cost - bin.channels * (worth[bin.site]?.[bin.cuts] ?? 0));
-  const found = { cost: 0, prices: scaled, runs, worth, driverCosts, knapsacks };
-  const drivers = choices.bins.reduce((sum, _, b) => sum + grantedCost(found, region, b), 0);
-  return { ...found, cost: runs.reduce((sum, own) => sum + own.cost, drivers) };
+  const found = { prices: scaled, runs, worth, driverCosts, knapsacks };
+  const options = runs.reduce((sum, own) => sum + own.cost, 0);
+  const looseCost = choices.bins.reduce((sum, _, b) => sum + grantedCost(found, region, b), options);
+  const cost = region.total.least.reduce((sum, _, type) => {
+    const own = choices.bins.flatMap((bin, b) => (bin.type === type ? [b] : []));
+    return sum + grantedTotal(driverCosts, region, own, type);
+  }, options);
+  return { ...found, cost, looseCost };
 }
 
 /** Kinds of the sections that `wanted` keeps; supply counts all sections, each as its kind. */

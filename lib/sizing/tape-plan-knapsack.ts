@@ -31,11 +31,11 @@ export class Knapsack {
   private readonly used: { kind: number; cuts: number; supply: number; price: number }[] = [];
 
   /** Each kind of section counts at most as often as there can be one. */
-  constructor(room: number, kinds: Kinds, price: (cuts: number) => number) {
+  constructor(room: number, kinds: Kinds, price: (kind: number) => number) {
     let last = new Float64Array(room + 1) as Float64Array;
     this.tables = [last];
     kinds.cuts.forEach((cuts, kind) => {
-      const own = { kind, cuts, supply: kinds.supply[kind] ?? 0, price: price(cuts) };
+      const own = { kind, cuts, supply: kinds.supply[kind] ?? 0, price: price(kind) };
       if (own.price <= 0 || cuts > room) return;
       last = withKind(last, cuts, own.supply, own.price);
       this.used.push(own);

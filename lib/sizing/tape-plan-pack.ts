@@ -6,6 +6,7 @@
  */
 import { type Bound, grantedCost, type Region } from './tape-plan-bound';
 import type { Bin } from './tape-plan-choices';
+import { Knapsack } from './tape-plan-knapsack';
 
 /** Sections that are alike to the packer: as long, and costing the same more or less to feed from each site. */
 export interface PackKind {
@@ -23,7 +24,7 @@ export interface PackJob {
   bound: Bound;
   /** Longest first. */
   kinds: readonly PackKind[];
-  /** Loads tried for each channel, and steps in all. */
+  /** Loads tried for each channel (1: the leanest, by knapsack), and steps in all. */
   width: number;
   steps: number;
 }
@@ -142,6 +143,31 @@ class Packer {
     return found.sort((a, b) => a.waste - b.waste);
   }
 
+  /** The one load that wastes least. */
+  private leanest(i: number, first: number): Fill[] {
+    const { kinds } = this.job;
+    const { cuts: room, site } = this.bin(i);
+    const value = (k: number) => (this.priced[k] ?? 0) - (kinds[k]?.extra[site] ?? Infinity);
+    const left = room - (kinds[first]?.cuts ?? 0);
+    const supply = this.left.map((own, k) => (k === first ? own - 1 : own));
+    const { kinds: used, counts: taken } = new Knapsack(
+      left,
+      { cuts: kinds.map(({ cuts }) => cuts), supply },
+      value,
+    ).load(left);
+    const counts = kinds.map((_, k) => Number(k === first));
+    used.forEach((k, j) => (counts[k] = (counts[k] ?? 0) + (taken[j] ?? 0)));
+    let [waste, extra] = [this.worth(i)[room] ?? 0, 0];
+    counts.forEach((n, k) => {
+      if (n === 0) return;
+      waste -= n * value(k);
+      extra += n * (kinds[k]?.extra[site] ?? 0);
+    });
+    this.steps += kinds.length;
+    this.complete = false;
+    return [{ counts, waste, extra }];
+  }
+
   private fits(k: number, site: number, room: number): boolean {
     const kind = this.job.kinds[k];
     return (
@@ -149,8 +175,9 @@ class Packer {
     );
   }
 
-  /** Without any packing the search goes on a little: the first one is worth most. */
+  /** A first packing is found in any case where nothing limits it; within a budget it gets a little longer. */
   private spent(): boolean {
+    if (!this.best && this.budget === Infinity) return false;
     return this.steps > (this.best ? 1 : 4) * this.job.steps;
   }
 
@@ -189,6 +216,7 @@ class Packer {
   }
 
   search(waste: number): void {
+    const { width } = this.job;
     if (waste + this.idle() >= this.budget) return;
     const first = this.left.findIndex((own) => own > 0);
     if (first < 0) return this.finish();
@@ -204,8 +232,8 @@ class Packer {
           opening = Math.max(0, this.job.bound.driverCosts[b] ?? 0);
       }
       const spent = waste + opening;
-      for (const fill of this.fills(i, first, this.budget - spent))
-        moves.push({ i, fill, opening, waste: spent + fill.waste });
+      const fills = width > 1 ? this.fills(i, first, this.budget - spent) : this.leanest(i, first);
+      for (const fill of fills) moves.push({ i, fill, opening, waste: spent + fill.waste });
     });
     moves.sort((a, b) => a.waste - b.waste || this.bin(a.i).cost - this.bin(b.i).cost);
     for (const move of moves) {

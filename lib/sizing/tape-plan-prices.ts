@@ -45,16 +45,29 @@ interface Rows {
   kind: number[][];
   bin: number[];
   most: number[];
+  /** Of each driver type: most in all (-1: none), what counts towards the least in all, and how much of it is wanted. */
+  totalMost: number[];
+  counted: number[];
+  wanted: number[];
   limits: number[];
 }
 
-function rowsOf({ runs, bins }: Choices, kinds: readonly Kinds[], { least, most }: Region): Rows {
+function rowsOf({ runs, bins }: Choices, kinds: readonly Kinds[], { least, most, total }: Region): Rows {
   const limits: number[] = runs.map(() => 1);
   const row = (limit: number) => limits.push(limit + spread(limits.length)) - 1;
+  const granted = total.least.map((_, type) =>
+    bins.reduce((sum, bin, b) => sum + (bin.type === type ? (least[b] ?? 0) : 0), 0),
+  );
+  const asked = (type: number) => (total.least[type] ?? 0) > (granted[type] ?? 0);
   return {
     kind: kinds.map((own) => own.cuts.map(() => row(0))),
     bin: bins.map((bin, b) => row(bin.channels * (least[b] ?? 0))),
     most: bins.map((_, b) => ((most[b] ?? 0) === Infinity ? -1 : row((most[b] ?? 0) - (least[b] ?? 0)))),
+    totalMost: total.most.map((own, type) =>
+      own === Infinity ? -1 : row(Math.max(0, own - (granted[type] ?? 0))),
+    ),
+    counted: granted.map((own, type) => (asked(type) ? row(own) : -1)),
+    wanted: total.least.map((own, type) => (asked(type) ? row(own) : -1)),
     limits,
   };
 }
@@ -74,14 +87,19 @@ export class Relaxation {
   ) {
     this.rows = rowsOf(choices, kinds, region);
     this.program = new GrowingProgram(this.rows.limits);
+    const { rows } = this;
     choices.bins.forEach((bin, b) => {
-      const most = this.rows.most[b] ?? -1;
-      const binRow = this.rows.bin[b] ?? 0;
+      const limited = [rows.most[b] ?? -1, rows.totalMost[bin.type] ?? -1].filter((row) => row >= 0);
+      const counted = [rows.counted[bin.type] ?? -1].filter((row) => row >= 0);
       this.program.add({
         cost: bin.cost,
-        rows: most < 0 ? [binRow] : [binRow, most],
-        factors: most < 0 ? [-bin.channels] : [-bin.channels, 1],
+        rows: [rows.bin[b] ?? 0, ...limited, ...counted],
+        factors: [-bin.channels, ...limited.map(() => 1), ...counted.map(() => -1)],
       });
+    });
+    // At least so many in all: each that counts towards it is rewarded, as a run's option is.
+    rows.wanted.forEach((row, type) => {
+      if (row >= 0) this.program.add({ cost: -dear, rows: [row, rows.counted[type] ?? 0], factors: [1, 1] });
     });
     pool.options.forEach((own) => this.addOption(own));
     pool.loads.forEach((own) => this.program.add(this.loadColumn(own)));

@@ -43,6 +43,8 @@ export interface Effort {
   /** Of a part that can be split further, and of one that can't. */
   trial: Trial;
   last: Trial;
+  /** Before them at first: the leanest loads. */
+  lean: Trial;
 }
 
 export interface Found {
@@ -86,7 +88,7 @@ class Search {
 
   /** Packs the sections of the options; keeps the plan if it is the cheapest so far. Whether no cheaper was overlooked. */
   private packOptions(chosen: readonly Choice[], region: Region, bound: Bound, effort: Trial): boolean {
-    const budget = this.incumbent - bound.cost;
+    const budget = this.incumbent - bound.looseCost;
     const channels: Found['channels'] = [];
     let cost = chosen.reduce((sum, own) => sum + own.cost, 0);
     let complete = true;
@@ -113,7 +115,7 @@ class Search {
   /** Tries the options of a region whose extra cost lies within the gap. Whether all was searched. */
   tryOptions(region: Region, bound: Bound, effort: Trial, shares?: Relaxed['shares']): boolean {
     this.memo.clear();
-    const gap = this.incumbent - bound.cost;
+    const gap = this.incumbent - bound.looseCost;
     const byRun = this.choices.runs.map(({ options }, r) => {
       const all = (region.options[r] ?? []).map((option): Choice => {
         const own = options[option] as Option;
@@ -138,7 +140,8 @@ class Search {
       for (const one of own) {
         if (tried > effort.combinations) return;
         // The best may have been improved on the way.
-        if (extra + one.extra < this.incumbent - bound.cost) walk(r + 1, [...chosen, one], extra + one.extra);
+        if (extra + one.extra < this.incumbent - bound.looseCost)
+          walk(r + 1, [...chosen, one], extra + one.extra);
       }
     };
     walk(0, [], 0);
@@ -163,6 +166,39 @@ function withDrivers(region: Region, b: number, least: number, most: number): Re
     least: region.least.map((own, i) => (i === b ? Math.max(own, least) : own)),
     most: region.most.map((own, i) => (i === b ? Math.min(own, most) : own)),
   };
+}
+
+function withTotal(
+  region: Region,
+  own: readonly number[],
+  type: number,
+  least: number,
+  most: number,
+): Region {
+  const { total } = region;
+  return {
+    ...region,
+    most: region.most.map((all, b) => (own.includes(b) ? Math.min(all, most) : all)),
+    total: {
+      least: total.least.map((all, t) => (t === type ? Math.max(all, least) : all)),
+      most: total.most.map((all, t) => (t === type ? Math.min(all, most) : all)),
+    },
+  };
+}
+
+/** On a driver type that the linear program has in part over all places. */
+function splitTotal({ bins }: Choices, { drivers }: Relaxed, region: Region): Region[] | null {
+  const totals = region.total.least.map((_, type) =>
+    drivers.reduce((sum, own, b) => sum + (bins[b]?.type === type ? own : 0), 0),
+  );
+  let [type, most] = [-1, WHOLE];
+  totals.forEach((own, t) => {
+    if (fromWhole(own) > most) [type, most] = [t, fromWhole(own)];
+  });
+  if (type < 0) return null;
+  const own = bins.flatMap((bin, b) => (bin.type === type ? [b] : []));
+  const floor = Math.floor(totals[type] ?? 0);
+  return [withTotal(region, own, type, 0, floor), withTotal(region, own, type, floor + 1, Infinity)];
 }
 
 /** The region with an option of a run forced, and with it left out. */
@@ -265,9 +301,11 @@ function dearOf({ runs, bins }: Choices): number {
 /** Searches until the bound is met or the effort is used up. */
 export function cheapestPlan(choices: Choices, effort: Effort): Searched {
   const kinds = kindsOf(choices.runs, choices.sites, () => true);
+  const types = Array.from({ length: 1 + Math.max(...choices.bins.map(({ type }) => type)) });
   const whole: Region = {
     least: choices.bins.map(() => 0),
     most: choices.bins.map(() => Infinity),
+    total: { least: types.map(() => 0), most: types.map(() => Infinity) },
     options: choices.runs.map(({ options }) => options.map((_, o) => o)),
   };
   const search = new Search(choices);
@@ -292,7 +330,9 @@ export function cheapestPlan(choices: Choices, effort: Effort): Searched {
     search.work += relaxed.work;
     const own = Math.max(bound, relaxed.bound.cost);
     if (own >= enough()) continue;
-    const parts = splitPart(relaxed, region) ?? splitWhole(relaxed, region);
+    const parts =
+      splitTotal(choices, relaxed, region) ?? splitPart(relaxed, region) ?? splitWhole(relaxed, region);
+    if (part === 0) search.tryOptions(region, relaxed.bound, effort.lean, relaxed.shares);
     const trial = parts ? effort.trial : effort.last;
     const searched = search.tryOptions(region, relaxed.bound, trial, relaxed.shares);
     if (searched || own >= enough()) continue;

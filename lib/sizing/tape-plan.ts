@@ -20,7 +20,9 @@ export type { TapePlan } from './tape-plan-result';
 
 /** Jobs of an everyday size are searched to the end; the largest within a moment. */
 const EVERYDAY_RUNS = 12;
+const LEAN = { combinations: 2, width: 1, steps: 6000 };
 const EVERYDAY: Effort = {
+  lean: LEAN,
   work: 3e8,
   steps: 5e6,
   parts: 4000,
@@ -28,11 +30,12 @@ const EVERYDAY: Effort = {
   last: { combinations: 1, width: Infinity, steps: 300_000 },
 };
 const LARGE: Effort = {
-  work: 4e7,
-  steps: 1e5,
-  parts: 3,
-  trial: { combinations: 8, width: 4, steps: 3000 },
-  last: { combinations: 8, width: 4, steps: 3000 },
+  lean: LEAN,
+  work: 3e7,
+  steps: 3e5,
+  parts: 4,
+  trial: { combinations: 4, width: 4, steps: 1500 },
+  last: { combinations: 4, width: 4, steps: 1500 },
 };
 
 function cutsOf({ runs, tape }: TapePlanInput, limits: Limits): number[] {
