@@ -4,6 +4,11 @@ import { atLeast, atMost } from '@/lib/engine/contract';
 /** A meter's error, % of the reading: common practice; a better meter only helps. */
 export const METER_PCT = { volts: 1, amps: 3 } as const;
 
+/** A supply is taken to be within 5 % of what it is marked with, unless its window is known: common practice. */
+export const SUPPLY_PCT = 5;
+/** Conductors are not colder than this when they are read. */
+export const COLD_CELSIUS = 20;
+
 export interface Band {
   low: number;
   high: number;

@@ -3,7 +3,7 @@ import * as z from 'zod/mini';
 import { EngineError, type Limits, refuse } from '@/lib/engine/contract';
 import { arrayAnalysisCalculation } from './array-analysis';
 import { conductorResistance } from './conductor-resistance';
-import { METER_PCT } from './fault-finder-band';
+import { COLD_CELSIUS, METER_PCT, SUPPLY_PCT } from './fault-finder-band';
 import { PLACES, type Quantity, type Reading, type Tolerances } from './fault-finder-model';
 import { celsius, notNegative, positive } from './inputs';
 import { checkForwardVolts, forwardVoltsShape } from './led-range';
@@ -90,12 +90,12 @@ type Circuit = FaultFinderInput['circuit'];
 /** Resistance of copper at 20 C over the same at working temperature; the law is the same for all sizes. */
 function coldShare(workingCelsius: number): number {
   const at = (own: number) => conductorResistance('1.5 mm2', 'solid', own).ohmsPerMetre;
-  return at(20) / at(workingCelsius);
+  return at(COLD_CELSIUS) / at(workingCelsius);
 }
 
 export function tolerancesOf({ tolerances = {} }: FaultFinderInput): Tolerances {
   const {
-    supplyPct = 5,
+    supplyPct = SUPPLY_PCT,
     currentPct = 5,
     resistorPct = 5,
     spreadVolts = 0.1,

@@ -2,17 +2,16 @@
  * What a meter should say, from the solved circuit: the lowest and the highest over the corners of what is not
  * known on the day, widened by the meter's own error. Pure: the engine is run again at each corner.
  */
-import { atLeast, atMost } from '@/lib/engine/contract';
 import type { BranchCircuit, CircuitKind, ResistorArray, TapeRun } from '@/lib/circuits/schema/electrical';
 import { figureCircuit, type TapeResult } from '@/lib/circuits/schema/figure';
 import { conductorResistance } from '@/lib/sizing/conductor-resistance';
+import { bandOver as bandOf, COLD_CELSIUS, METER_PCT, SUPPLY_PCT } from '@/lib/sizing/fault-finder-band';
 import type { ShopSettings } from '@/lib/units/settings';
 
-/** A supply is taken to be within 5 % of what it is marked with, unless the circuit states its own window. */
-export const SUPPLY_TOLERANCE = 0.05;
-/** A meter's error: 1 % of a volts reading, 3 % of a clamp's. Common practice; a better meter only helps. */
-export const METER_ERROR = { V: 0.01, A: 0.03 } as const;
-const COLD_CELSIUS = 20;
+export { judge, type Verdict } from '@/lib/sizing/fault-finder-band';
+
+/** Unless the circuit states its own window. */
+const SUPPLY_TOLERANCE = SUPPLY_PCT / 100;
 
 export interface Band {
   nominal: number;
@@ -32,24 +31,9 @@ export interface Expected extends Band {
   mains: boolean;
 }
 
-/** Lowest to highest of the corners, widened by the meter's error. */
+/** What was figured, and the band over it and its corners, with the engine's meter. */
 export function bandOver(nominal: number, corners: readonly number[], unit: 'V' | 'A'): Band {
-  const all = [nominal, ...corners];
-  return {
-    nominal,
-    low: Math.min(...all) * (1 - METER_ERROR[unit]),
-    high: Math.max(...all) * (1 + METER_ERROR[unit]),
-  };
-}
-
-export type Verdict = 'in' | 'near' | 'out';
-
-/** In the band, near it (within half a band more on either side), or out of it. */
-export function judge(band: Pick<Band, 'low' | 'high'>, value: number): Verdict {
-  const within = (low: number, high: number) => atLeast(value, low) && atMost(value, high);
-  const half = (band.high - band.low) / 2;
-  if (within(band.low, band.high)) return 'in';
-  return within(band.low - half, band.high + half) ? 'near' : 'out';
+  return { nominal, ...bandOf([nominal, ...corners], METER_PCT[unit === 'V' ? 'volts' : 'amps']) };
 }
 
 /** The run with its supply and the temperature of its copper set: rails and feeders are copper alike. */
