@@ -1,9 +1,11 @@
 /** Light, energy and money over time, in the order in which `engine -- list` names them. */
 import type { Calculation } from '@/lib/engine/contract';
+import { energySavingCalculation } from './energy-saving';
 import { photometricFileCalculation } from './photometric-file';
 import { pointIlluminanceCalculation } from './point-illuminance';
 
 export const lightingCalculations = [
   photometricFileCalculation,
   pointIlluminanceCalculation,
+  energySavingCalculation,
 ] as unknown as Calculation[];

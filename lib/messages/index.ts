@@ -9,6 +9,7 @@ import { findings } from './en/findings';
 import { benchAndBusFindings, benchAndBusWorking } from './en/findings-bench-and-bus';
 import { circuitFindings } from './en/findings-circuits';
 import { constantCurrentFindings } from './en/findings-constant-current';
+import { lightingFindings, lightingWorking } from './en/findings-lighting';
 import { photometryFindings, photometryWorking } from './en/findings-photometry';
 import { faultFinderFindings, faultFinderWorking } from './en/findings-fault-finder';
 import { retrofitFindings } from './en/findings-retrofit';
@@ -37,6 +38,8 @@ const catalogue = catalogueOf({
   ...constantCurrentFindings,
   ...benchAndBusFindings,
   ...benchAndBusWorking,
+  ...lightingFindings,
+  ...lightingWorking,
   ...photometryFindings,
   ...photometryWorking,
   ...faultFinderFindings,

@@ -257,6 +257,25 @@ export const EXAMPLES: Readonly<Record<string, Record<string, unknown>>> = {
     targetLux: 300,
     minimumUniformity: 0.6,
   },
+  'energy-saving': {
+    existing: [
+      { quantity: 80, watts: 112, hoursPerYear: 3000, controlFactor: 1 },
+      { quantity: 6, watts: 90, hoursPerYear: 4400, controlFactor: 1 },
+    ],
+    proposed: [
+      { quantity: 80, watts: 38, hoursPerYear: 3000, controlFactor: 0.71 },
+      { quantity: 6, watts: 30, hoursPerYear: 4400, controlFactor: 1 },
+    ],
+    energyRate: 0.13,
+    demandRate: 14.5,
+    demandMonths: 12,
+    coincidence: 0.7,
+    interactionFactor: 1.08,
+    fuelPenaltyPerKilowattHour: 0.01,
+    kgCo2PerKilowattHour: 0.3734,
+    rateIsBlended: false,
+    demandSharePct: 40,
+  },
   'price-lines': {
     currency: 'USD',
     taxRounding: 'line',
