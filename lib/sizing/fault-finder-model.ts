@@ -99,7 +99,7 @@ export const FEEDER_FACTOR: Parameter = { low: 0.1, high: 1000, scale: 'log', un
 
 /** Nobody draws a cable with a quarter, or lays one of four times, the resistance: then a joint comes first. */
 export const feederSurprise = (factor: number) => (factor > 4 || factor < 1 / 4 ? 1 : 0);
-export const JOINT_SURPRISE = () => 0.5;
+export const jointSurprise = () => 0.5;
 
 export const settingOf = (drawn: number, unit: 'V' | 'A'): Parameter => ({
   low: drawn / 10,

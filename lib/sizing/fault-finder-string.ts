@@ -3,7 +3,7 @@ import {
   type Family,
   FEEDER_FACTOR,
   feederSurprise,
-  JOINT_SURPRISE,
+  jointSurprise,
   jointOhms,
   type Model,
   type Parameter,
@@ -100,7 +100,7 @@ function feederFamilies(input: StringInput, joint: Parameter): Family[] {
     cause: 'joint-in-feed',
     rail,
     parameter: joint,
-    surprise: JOINT_SURPRISE,
+    surprise: jointSurprise,
     solve: (_, ohms) => {
       const key = rail === 'positive' ? 'positiveOhms' : 'negativeOhms';
       return solvedString({ ...wired, [key]: input[key] + ohms });

@@ -5,7 +5,7 @@ import {
   type Family,
   FEEDER_FACTOR,
   feederSurprise,
-  JOINT_SURPRISE,
+  jointSurprise,
   jointOhms,
   type Model,
   OPEN_OHMS,
@@ -170,10 +170,10 @@ function missing(tape: Tape, i: number): Solved {
       f === i ? { ...feed, positiveOhms: OPEN_OHMS, negativeOhms: OPEN_OHMS } : feed,
     ),
   );
-  // Nothing flows in it, not even what so many ohms let through.
-  const idle = ({ at, index, quantity }: Quantity) =>
-    index === i + 1 && at !== 'cut' && !(at === 'feed' && quantity === 'volts');
-  return { read: (quantity) => (idle(quantity) ? 0 : read(quantity)) };
+  // Nothing flows in it; along its conductors stands what the tape has less than the driver.
+  return {
+    read: (quantity) => (quantity.index === i + 1 && quantity.quantity === 'amps' ? 0 : read(quantity)),
+  };
 }
 
 /** A rail broken at a boundary: beyond it nothing lights, unless it is fed from there as well. */
@@ -205,7 +205,7 @@ function feedFamilies(tape: Tape, i: number, volts: number, amps: number): Famil
     cause: 'joint-in-feed',
     rail,
     parameter: jointOhms(volts, amps),
-    surprise: JOINT_SURPRISE,
+    surprise: jointSurprise,
     solve: (_, ohms) => {
       const key = rail === 'positive' ? 'positiveOhms' : 'negativeOhms';
       const { read } = solvedTape(

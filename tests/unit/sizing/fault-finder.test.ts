@@ -283,8 +283,8 @@ describe('what is refused, by its path', () => {
     expect(refused({ circuit: { kind: 'array', input: { ...array, supply: {} } }, readings })).toBe(
       'invalid-input circuit.input.supply.volts',
     );
-    const module = { ...series.module, forwardVoltsMin: 4 };
-    expect(refused({ circuit: { kind: 'string', input: { ...series, module } }, readings })).toBe(
+    const upsideDown = { ...series.module, forwardVoltsMin: 4 };
+    expect(refused({ circuit: { kind: 'string', input: { ...series, module: upsideDown } }, readings })).toBe(
       'invalid-input circuit.input.module.forwardVoltsMin',
     );
   });
@@ -454,5 +454,106 @@ describe('what is said', () => {
     const answer = run(tape(heavy), [{ ...feed, volts: 12 }]);
     expect(finding(answer, 'band-not-whole')).toMatchObject({ severity: 'caution' });
     expect(codes(run(tape(), good))).not.toContain('band-not-whole');
+  });
+});
+
+describe('anything that can be read on anything that can be drawn', () => {
+  const ohms = fc.oneof(fc.constant(0), fc.double({ min: 1e-3, max: 500, noNaN: true }));
+  const anyDiode = fc.record({
+    saturationAmps: fc.constantFrom(1e-24, 1e-18, 1e-9),
+    emissionCoefficient: fc.double({ min: 0.5, max: 4, noNaN: true }),
+    seriesOhms: ohms,
+  });
+  const anySupply = fc.oneof(
+    fc.record({ volts: fc.double({ min: 0.1, max: 60, noNaN: true }), sourceOhms: ohms }),
+    fc.record({ amps: fc.double({ min: 0, max: 2, noNaN: true }) }),
+  );
+  const anyArray = fc.record({
+    kind: fc.constant('array'),
+    input: fc.record({
+      supply: anySupply,
+      sharedOhms: ohms,
+      strings: fc.array(
+        fc.record({ ballastOhms: ohms, leds: fc.array(anyDiode, { minLength: 1, maxLength: 4 }) }),
+        { minLength: 1, maxLength: 4 },
+      ),
+    }),
+  });
+  const anyString = fc.record({
+    kind: fc.constant('string'),
+    input: fc.record({
+      amps: fc.double({ min: 0.01, max: 3, noNaN: true }),
+      count: fc.integer({ min: 1, max: 40 }),
+      module: fc.constantFrom(series.module, { forwardVolts: 1, forwardVoltsMin: 1, forwardVoltsMax: 1 }),
+      positiveOhms: ohms,
+      negativeOhms: ohms,
+    }),
+  });
+  const anyLoad = fc.constantFrom<TapeInput['load']>(
+    led,
+    { ...led, ballastOhms: 0, leds: 1 },
+    { model: 'resistive', ohms: 3 },
+    { model: 'constant-current', amps: 0 },
+    { model: 'constant-current', amps: 0.5 },
+  );
+  const anyTape = fc.record({
+    kind: fc.constant('tape'),
+    input: fc.record({
+      cuts: fc.integer({ min: 1, max: 12 }),
+      cutMetres: fc.constantFrom(0, 0.05, 1),
+      railOhmsPerMetre: fc.record({ positive: ohms, negative: ohms }),
+      load: anyLoad,
+      feeds: fc.array(
+        fc.record({
+          at: fc.constantFrom(0, 1),
+          volts: fc.constantFrom(12, 24),
+          positiveOhms: ohms,
+          negativeOhms: ohms,
+          sourceOhms: fc.constantFrom(0, 0.1),
+        }),
+        { minLength: 1, maxLength: 3 },
+      ),
+    }),
+  });
+  const figure = fc.oneof(fc.double({ min: -30, max: 60, noNaN: true }), fc.constantFrom(0, 1e6, -1e6, 1e-9));
+  const anyReading = fc.record({
+    at: fc.constantFrom('feed', 'cut', 'string', 'positive-conductor', 'negative-conductor'),
+    index: fc.constantFrom(1, 1, 1, 2, 3),
+    quantity: fc.constantFrom('volts', 'amps'),
+    figure,
+  });
+
+  it('is answered in finite figures, or refused by name', () => {
+    let answered = 0;
+    let looked = 0;
+    fc.assert(
+      fc.property(
+        fc.oneof(anyArray, anyString, anyTape),
+        fc.array(anyReading, { minLength: 1, maxLength: 4 }),
+        (circuit, drawn) => {
+          const readings = drawn.map(({ quantity, figure: own, ...place }) => ({
+            ...place,
+            [quantity]: own,
+          }));
+          try {
+            const { result, findings, working } = run(circuit, readings);
+            answered++;
+            if (result.causes.length > 0) looked++;
+            const numbers = JSON.stringify([result, findings, working], (_, value: unknown) => {
+              if (typeof value === 'number') expect(Number.isFinite(value)).toBe(true);
+              return value;
+            });
+            expect(numbers).not.toContain('undefined');
+            expect(result.causes.map(({ rank }) => rank)).toEqual(result.causes.map((_, i) => i + 1));
+          } catch (error) {
+            if (!(error instanceof EngineError)) throw error;
+            expect(error.issues.length).toBeGreaterThan(0);
+          }
+        },
+      ),
+      { numRuns: 500 },
+    );
+    expect(answered).toBeGreaterThan(50);
+    expect(looked).toBeGreaterThan(20);
   });
 });
