@@ -1,6 +1,7 @@
 /** Light, energy and money over time, in the order in which `engine -- list` names them. */
 import type { Calculation } from '@/lib/engine/contract';
 import { energySavingCalculation } from './energy-saving';
+import { paybackCalculation } from './payback';
 import { photometricFileCalculation } from './photometric-file';
 import { pointIlluminanceCalculation } from './point-illuminance';
 
@@ -8,4 +9,5 @@ export const lightingCalculations = [
   photometricFileCalculation,
   pointIlluminanceCalculation,
   energySavingCalculation,
+  paybackCalculation,
 ] as unknown as Calculation[];

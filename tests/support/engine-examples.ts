@@ -276,6 +276,16 @@ export const EXAMPLES: Readonly<Record<string, Record<string, unknown>>> = {
     rateIsBlended: false,
     demandSharePct: 40,
   },
+  payback: {
+    cost: 18000,
+    incentive: 6600,
+    annualSaving: 4200,
+    annualMaintenanceSaving: 600,
+    escalationPct: 2,
+    discountPct: 6,
+    years: 15,
+    incentiveCapPct: 30,
+  },
   'price-lines': {
     currency: 'USD',
     taxRounding: 'line',

@@ -24,6 +24,30 @@ export const lightingFindings = {
   'finding.energy-hours-differ.title': 'Other hours than before',
   'finding.energy-hours-differ.body':
     'The old lights burn {hoursBefore} hours a year, the new ones {hoursAfter}. What controls save belongs into the control factor, so that it shows as such.',
+  'finding.payback-incentive-covers-cost.title': 'Incentive covers the whole cost',
+  'finding.payback-incentive-covers-cost.body':
+    'An incentive of {incentive} stands against a cost of {cost}. Programmes seldom pay all: see what share they allow.',
+  'finding.payback-no-saving.title': 'Never pays back',
+  'finding.payback-no-saving.body':
+    'The first year saves {firstYear}. There is no payback and no rate of return to show.',
+  'finding.payback-beyond-years.title': 'Pays back too late',
+  'finding.payback-beyond-years.body':
+    'The job pays back after {simplePaybackYears} years; {years} are looked at.',
+  'finding.payback-below-discount.title': 'Earns less than the discount rate',
+  'finding.payback-below-discount.body':
+    'The job pays back after {simplePaybackYears} years, and at {discountPct:%} a year its savings are still worth less than it costs.',
+  'finding.payback-first-year-plain.title': 'First year not escalated',
+  'finding.payback-first-year-plain.body':
+    'Energy savings grow by {escalationPct:%} a year from the second year on; savings of maintenance stay the same.',
+  'finding.payback-escalation-over-discount.title': 'Savings grow faster than discounted',
+  'finding.payback-escalation-over-discount.body':
+    'Savings grow by {escalationPct:%} a year and are discounted by {discountPct:%}, so far years count more than near ones. Use an escalation that has a source.',
+  'finding.payback-no-single-rate.title': 'No single rate of return',
+  'finding.payback-no-single-rate.body':
+    'The yearly figures change sign {changes} times. Look at the net present value instead.',
+  'finding.payback-incentive-capped.title': 'Incentive cut to its cap',
+  'finding.payback-incentive-capped.body':
+    '{incentive} is asked for; at {capPct:%} of the cost the programme pays {allowed}.',
 } as const;
 
 export const lightingWorking = {
@@ -34,4 +58,10 @@ export const lightingWorking = {
   'working.energy-fuel-cost': 'Heating fuel that takes the place of the lights’ heat',
   'working.energy-cost': 'Money saved in a year',
   'working.energy-carbon': 'Carbon dioxide saved in a year',
+  'working.payback-net-cost': 'Net cost',
+  'working.payback-simple': 'Simple payback',
+  'working.payback-present-savings': 'Savings of all years, worth today',
+  'working.payback-net-present-value': 'Net present value',
+  'working.payback-internal-rate': 'Internal rate of return',
+  'working.payback-savings-to-investment': 'Savings to investment',
 } as const;
