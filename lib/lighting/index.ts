@@ -1,6 +1,7 @@
 /** Light, energy and money over time, in the order in which `engine -- list` names them. */
 import type { Calculation } from '@/lib/engine/contract';
 import { energySavingCalculation } from './energy-saving';
+import { lumenMaintenanceCalculation } from './lumen-maintenance';
 import { paybackCalculation } from './payback';
 import { photometricFileCalculation } from './photometric-file';
 import { pointIlluminanceCalculation } from './point-illuminance';
@@ -10,4 +11,5 @@ export const lightingCalculations = [
   pointIlluminanceCalculation,
   energySavingCalculation,
   paybackCalculation,
+  lumenMaintenanceCalculation,
 ] as unknown as Calculation[];

@@ -286,6 +286,19 @@ export const EXAMPLES: Readonly<Record<string, Record<string, unknown>>> = {
     years: 15,
     incentiveCapPct: 30,
   },
+  'lumen-maintenance': {
+    cases: [55, 85].map((caseCelsius) => ({
+      caseCelsius,
+      points: [0, 1000, 2000, 3000, 4000, 5000, 6000, 7000, 8000, 9000, 10_000].map((hours) => ({
+        hours,
+        maintenance: 0.99 * Math.exp(-hours * (caseCelsius === 55 ? 1.7e-6 : 3.4e-6)),
+      })),
+    })),
+    inSituCelsius: 70,
+    sampleSize: 25,
+    threshold: 0.7,
+    claimedHours: 100_000,
+  },
   'price-lines': {
     currency: 'USD',
     taxRounding: 'line',

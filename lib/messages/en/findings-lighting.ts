@@ -48,6 +48,36 @@ export const lightingFindings = {
   'finding.payback-incentive-capped.title': 'Incentive cut to its cap',
   'finding.payback-incentive-capped.body':
     '{incentive} is asked for; at {capPct:%} of the cost the programme pays {allowed}.',
+  'finding.maintenance-cooler-than-tested.title': 'Cooler than tested',
+  'finding.maintenance-cooler-than-tested.body':
+    'At {inSituCelsius:C} the LEDs run cooler than the coolest case tested; the figures of {caseCelsius:C} stand.',
+  'finding.maintenance-not-interpolated.title': 'Nothing to take between the cases',
+  'finding.maintenance-not-interpolated.body':
+    'One of the cases about {inSituCelsius:C} shows no decay. The figures of the hotter one, {caseCelsius:C}, stand.',
+  'finding.maintenance-hotter-lasts-longer.title': 'Hotter LEDs last no shorter',
+  'finding.maintenance-hotter-lasts-longer.body':
+    'At {upperCelsius:C} the light falls no faster than at {lowerCelsius:C}. Ask for a longer test before you rely on what lies between.',
+  'finding.maintenance-no-decay.title': 'No decay to project',
+  'finding.maintenance-no-decay.body':
+    'Over the hours that count of a test of {durationHours} h the light does not fall. Only the cap can be told.',
+  'finding.maintenance-readings-sparse.title': 'Readings too far apart',
+  'finding.maintenance-readings-sparse.body':
+    'Two readings lie {gapHours} h apart; the test’s method asks for one each {mostHours} h.',
+  'finding.maintenance-poor-fit.title': 'Readings do not follow the curve',
+  'finding.maintenance-poor-fit.body':
+    'A reading lies {residualPct:%} off the curve, and the projection hangs on it. Look at the test report.',
+  'finding.maintenance-passed-in-test.title': 'Threshold passed within the test',
+  'finding.maintenance-passed-in-test.body':
+    'The light fell to the threshold at {passedAtHours} h, within the {durationHours} h of the test. That stands, whatever the curve says.',
+  'finding.maintenance-capped.title': 'Capped by the test',
+  'finding.maintenance-capped.body':
+    'The curve gives {calculatedHours} h; with {units} units no more than {capTimes} times the {durationHours} h of the test may be told: {capHours} h.',
+  'finding.maintenance-claim-not-supported.title': 'Claim not supported',
+  'finding.maintenance-claim-not-supported.body':
+    '{claimedHours} h are claimed; the test supports {reportedHours} h.',
+  'finding.maintenance-of-the-leds-alone.title': 'Life of the LEDs alone',
+  'finding.maintenance-of-the-leds-alone.body':
+    'The LEDs keep their light for {reportedHours} h. Driver, optics and seals have a life of their own, often a shorter one.',
 } as const;
 
 export const lightingWorking = {
@@ -64,4 +94,12 @@ export const lightingWorking = {
   'working.payback-net-present-value': 'Net present value',
   'working.payback-internal-rate': 'Internal rate of return',
   'working.payback-savings-to-investment': 'Savings to investment',
+  'working.maintenance-alpha': 'Decay per hour',
+  'working.maintenance-b': 'Light at the start of the curve',
+  'working.maintenance-activation': 'Activation energy over Boltzmann’s constant',
+  'working.maintenance-alpha-in-use': 'Decay per hour at the temperature in use',
+  'working.maintenance-b-in-use': 'Light at the start of the curve between both cases',
+  'working.maintenance-calculated': 'Hours by the curve',
+  'working.maintenance-cap': 'Most hours that may be told',
+  'working.maintenance-reported': 'Hours that are told',
 } as const;
