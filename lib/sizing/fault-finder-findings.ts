@@ -63,15 +63,12 @@ function shorted({ suspected }: Found): Finding[] {
 function setting({ suspected }: Found): Finding[] {
   const [best] = suspected;
   if (best?.cause !== 'supply-setting') return [];
+  const { index, value, unit } = best;
   return [
     caution(
-      'supply-not-as-drawn',
-      `The driver of feed ${best.index} is not set or made as drawn: ${best.value} ${best.unit} explains the readings.`,
-      {
-        index: best.index,
-        volts: best.unit === 'V' ? best.value : null,
-        amps: best.unit === 'A' ? best.value : null,
-      },
+      unit === 'V' ? 'supply-volts-not-as-drawn' : 'supply-amps-not-as-drawn',
+      `The driver of feed ${index} is not set or made as drawn: ${value} ${unit} explains the readings.`,
+      unit === 'V' ? { index, volts: value } : { index, amps: value },
       COMMON_PRACTICE,
     ),
   ];
@@ -107,11 +104,13 @@ function notTold({ result, suspected }: Found): Finding[] {
   const { nextReading: next } = result;
   const [first, second] = suspected;
   if (next && next.between[0] === next.between[1]) {
+    // Boundary b lies between segments b and b + 1.
+    const [from, to] = [first?.from ?? null, (first?.to ?? 0) + 1];
     return [
       note(
         'place-not-separable',
-        `It lies between places ${first?.from} and ${first?.to}: ${next.quantity} at ${next.at} ${next.index} would tell more (${next.under[0]} or ${next.under[1]}).`,
-        { from: first?.from ?? null, to: first?.to ?? null, ...under(next) },
+        `It lies between segments ${from} and ${to}: ${next.quantity} at ${next.at} ${next.index} would tell more (${next.under[0]} or ${next.under[1]}).`,
+        { from, to, ...under(next) },
         'least squares in units of the meter error',
       ),
     ];

@@ -98,22 +98,38 @@ function trySolve(family: Family, place: number, value: number): Solved | null {
   }
 }
 
-function bestValue(family: Family, place: number, misfitAt: (value: number) => number): number {
-  const { parameter } = family;
+/** Figures at places side by side differ by less than this many times. */
+const NEAR = Math.log(4);
+
+function bestValue(
+  { parameter }: Family,
+  misfitAt: (value: number) => number,
+  near: number | undefined,
+): number {
   if (!parameter) return 0;
   const { low, high, scale } = parameter;
   if (scale === 'whole') return lowestWhole(misfitAt, growingRow(low, high)).at;
   if (scale === 'linear') return lowest(misfitAt, low, high, LINEAR_WIDTH * (high - low)).at;
-  return Math.exp(lowest((ln) => misfitAt(Math.exp(ln)), Math.log(low), Math.log(high), LOG_WIDTH).at);
+  const misfitAtLn = (ln: number) => misfitAt(Math.exp(ln));
+  if (near !== undefined) {
+    const [from, to] = [Math.log(near) - NEAR, Math.log(near) + NEAR];
+    const { at, least } = lowest(misfitAtLn, from, to, LOG_WIDTH, 4);
+    const inside = at > from + LOG_WIDTH && at < to - LOG_WIDTH && least < Infinity;
+    if (inside && at > Math.log(low) && at < Math.log(high)) return Math.exp(at);
+  }
+  return Math.exp(lowest(misfitAtLn, Math.log(low), Math.log(high), LOG_WIDTH).at);
 }
 
-/** The figure that explains the readings best, with the fault at this place. */
-export function fitAt(family: Family, weighed: Weighed, place: number): Fit | null {
+/**
+ * The figure that explains the readings best, with the fault at this place.
+ * @param near the figure at a place close by, where one is known
+ */
+function fitAt(family: Family, weighed: Weighed, place: number, near?: number): Fit | null {
   const misfitAt = (value: number) => {
     const solved = trySolve(family, place, value);
     return solved ? weighed.misfit(solved) : Infinity;
   };
-  const value = bestValue(family, place, misfitAt);
+  const value = bestValue(family, misfitAt, near);
   const solved = trySolve(family, place, value);
   if (!solved) return null;
   const misfit = weighed.misfit(solved);
@@ -141,9 +157,16 @@ export class Places {
   at(place: number): Fit | null {
     const known = this.fits.get(place);
     if (known !== undefined) return known;
-    const fit = fitAt(this.family, this.weighed, place);
+    const fit = fitAt(this.family, this.weighed, place, this.nearest(place)?.value);
     this.fits.set(place, fit);
     return fit;
+  }
+
+  private nearest(place: number): Fit | null {
+    let nearest: Fit | null = null;
+    const off = (fit: Fit) => Math.abs(fit.place - place);
+    for (const fit of this.fits.values()) if (fit && (!nearest || off(fit) < off(nearest))) nearest = fit;
+    return nearest;
   }
 
   score = (place: number): number => this.at(place)?.score ?? Infinity;

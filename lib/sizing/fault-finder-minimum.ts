@@ -18,23 +18,33 @@ function vertex(a: Minimum, b: Minimum, c: Minimum): number {
 
 /**
  * Between `low` and `high`: the lowest of a coarse row of points, then steps to the vertex of the parabola through
- * the three best, or by the golden section where that leads nowhere.
+ * the three best, or by the golden section where that leads nowhere; ended when two parabolas agree with the best.
  * @param figure may be Infinity where there is none
  * @param width how near the place is wanted
+ * @param points of the coarse row, less one
  */
-export function lowest(figure: (x: number) => number, low: number, high: number, width: number): Minimum {
-  const row = Array.from({ length: GRID + 1 }, (_, i): Minimum => {
-    const at = low + ((high - low) * i) / GRID;
+export function lowest(
+  figure: (x: number) => number,
+  low: number,
+  high: number,
+  width: number,
+  points = GRID,
+): Minimum {
+  const row = Array.from({ length: points + 1 }, (_, i): Minimum => {
+    const at = low + ((high - low) * i) / points;
     return { at, least: figure(at) };
   });
   const i = row.reduce((best, { least }, n) => (least < (row[best]?.least ?? Infinity) ? n : best), 0);
   let best = row[i] as Minimum;
   let left = row[Math.max(0, i - 1)] as Minimum;
-  let right = row[Math.min(GRID, i + 1)] as Minimum;
+  let right = row[Math.min(points, i + 1)] as Minimum;
+  let agreed = 0;
   for (let step = 0; step < MAX_STEPS && right.at - left.at > width; step++) {
-    let at = step % 3 === 2 ? NaN : vertex(left, best, right);
-    const inside = at > left.at && at < right.at && Math.abs(at - best.at) > width / 4;
-    if (!inside) {
+    let at = vertex(left, best, right);
+    agreed = Math.abs(at - best.at) <= width ? agreed + 1 : 0;
+    if (agreed === 2) break;
+    const inside = at > left.at && at < right.at && agreed === 0;
+    if (!inside || step % 3 === 2) {
       const wider = best.at - left.at > right.at - best.at ? left : right;
       at = best.at + GOLDEN * (wider.at - best.at);
     }

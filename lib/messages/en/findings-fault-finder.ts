@@ -9,9 +9,12 @@ export const faultFinderFindings = {
   'finding.shorted-leds-overdrive.title': 'LEDs shorted, the others overdriven',
   'finding.shorted-leds-overdrive.body':
     '{leds, plural, one {One LED looks} other {# LEDs look}} shorted: what is in series with it carries more than it is made for. Switch off and replace that part.',
-  'finding.supply-not-as-drawn.title': 'Driver not as drawn',
-  'finding.supply-not-as-drawn.body':
-    'A driver at another setting, or of another kind, would explain the readings ({volts:V}, {amps:A}). Read its label and its setting.',
+  'finding.supply-volts-not-as-drawn.title': 'Driver volts not as drawn',
+  'finding.supply-volts-not-as-drawn.body':
+    'A driver that gives {volts:V} would explain the readings. Read its label and its setting before anything else is changed.',
+  'finding.supply-amps-not-as-drawn.title': 'Driver current not as drawn',
+  'finding.supply-amps-not-as-drawn.body':
+    'A driver set to {amps:A} would explain the readings. Read its label and its setting before anything else is changed.',
   'finding.no-cause-explains.title': 'No single cause explains this',
   'finding.no-cause-explains.body':
     '{readings, plural, one {One reading is} other {# readings are}} off, and no single cause explains all. Read again, look for two faults, or for wiring that is not as drawn.',
