@@ -5,6 +5,8 @@
  */
 const config = {
   distDir: process.env.NEXT_DIST_DIR ?? '.next',
+  // Names a build: phones with an older service worker take the new one.
+  env: process.env.NODE_ENV === 'production' ? { LAMPWRIGHT_BUILD: Date.now().toString(36) } : {},
   poweredByHeader: false,
   // A customer's page must not give its address away, nor be found.
   headers: async () => [

@@ -2,19 +2,40 @@
 import { signOut } from 'next-auth/react';
 import { useState } from 'react';
 import { Button } from '@/components/ui/button';
+import { forgetPersons } from '@/lib/offline/person';
+import { wipeOffline } from '@/lib/offline/store';
 
+/** Nothing of a person stays on the device; what was never sent does, or goes only on their word. */
 export function SignOut() {
   const [pending, setPending] = useState(false);
+  const [unsent, setUnsent] = useState(false);
+  const leave = async (force: boolean) => {
+    setPending(true);
+    const clean = await wipeOffline(force).catch(() => true);
+    if (!clean && !unsent) {
+      setUnsent(true);
+      setPending(false);
+      return;
+    }
+    forgetPersons();
+    await signOut({ callbackUrl: '/sign-in' });
+  };
   return (
-    <Button
-      look="secondary"
-      pending={pending}
-      onClick={() => {
-        setPending(true);
-        void signOut({ callbackUrl: '/sign-in' });
-      }}
-    >
-      Sign out
-    </Button>
+    <div className="flex flex-col gap-3">
+      {unsent ? (
+        <p role="alert" className="text-sm">
+          Not all of your work has been sent. Keep it here until you sign in again on this device, or throw it
+          away.
+        </p>
+      ) : null}
+      <Button look="secondary" pending={pending} onClick={() => void leave(false)}>
+        {unsent ? 'Sign out, keep it here' : 'Sign out'}
+      </Button>
+      {unsent ? (
+        <Button look="danger" pending={pending} onClick={() => void leave(true)}>
+          Throw it away and sign out
+        </Button>
+      ) : null}
+    </div>
   );
 }

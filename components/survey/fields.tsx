@@ -19,14 +19,24 @@ interface Draft {
   text: string;
   /** The value that the text stood for when it was typed. */
   of: string;
+  /** Values that may still be shown on the way there: keys come faster than the store answers. */
+  through: readonly string[];
 }
 
-/** What was typed is kept as long as it stands for the value; a value from elsewhere replaces it. */
+/** What was typed is kept as long as it stands for the value, or the value is still on its way to it; a value from elsewhere replaces it. */
 function useDraft(shown: string, value: unknown): [string, (text: string, next: unknown) => void] {
   const [draft, setDraft] = useState<Draft | null>(null);
   const key = JSON.stringify(value ?? null);
-  const text = draft && draft.of === key ? draft.text : shown;
-  return [text, (typed, next) => setDraft({ text: typed, of: JSON.stringify(next ?? null) })];
+  // It has arrived: an older value that comes now comes from elsewhere.
+  if (draft && draft.of === key && draft.through.length > 0) setDraft({ ...draft, through: [] });
+  const text = draft && (draft.of === key || draft.through.includes(key)) ? draft.text : shown;
+  const type = (typed: string, next: unknown) =>
+    setDraft((before) => ({
+      text: typed,
+      of: JSON.stringify(next ?? null),
+      through: before && before.of !== key ? [...before.through, before.of] : [key],
+    }));
+  return [text, type];
 }
 
 type Common = {
@@ -68,7 +78,18 @@ export function NotesField({
   ...rest
 }: Common & { value: string; onSave: (value: string) => void }) {
   const id = useId();
-  return <TextArea id={id} {...rest} value={value} onChange={(event) => onSave(event.target.value)} />;
+  const [text, setText] = useDraft(value, value);
+  return (
+    <TextArea
+      id={id}
+      {...rest}
+      value={text}
+      onChange={(event) => {
+        setText(event.target.value, event.target.value);
+        onSave(event.target.value);
+      }}
+    />
+  );
 }
 
 type Parser = (text: string) => { ok: true; value: number } | { ok: false; message: string };

@@ -15,6 +15,8 @@ function statusText({ queue, outcome }: OfflineScope): string {
   if (outcome === 'offline')
     return waiting > 0 ? `No signal. Kept on this device, ${toSend}.` : 'No signal. Nothing is unsent.';
   if (waiting > 0) return `Kept on this device, ${toSend}.`;
+  const held = queue.length;
+  if (held > 0) return held === 1 ? '1 change waits for you, below.' : `${held} changes wait for you, below.`;
   return outcome === 'starting' ? 'Opening what is kept on this device.' : 'All saved.';
 }
 
@@ -22,6 +24,14 @@ const nameOf = (data: Record<string, unknown>) => {
   const name = data['name'] ?? data['luminaireType'] ?? data['newType'];
   return typeof name === 'string' && name !== '' ? name : 'this entry';
 };
+
+/** `weeklyHours` as "weekly hours": the fields' own labels stand on the screen below. */
+const wordsOf = (key: string) => key.replace(/([A-Z])/g, ' $1').toLowerCase();
+
+function shown(value: unknown): string {
+  if (value === null || value === undefined || value === '') return 'not known';
+  return typeof value === 'object' ? JSON.stringify(value) : `“${String(value)}”`;
+}
 
 function Conflict({ event, offline }: { event: QueuedEvent; offline: OfflineScope }) {
   const choose = (choice: typeof keepMine) => void choice(offline.store, event).then(offline.nudge);
@@ -38,10 +48,9 @@ function Conflict({ event, offline }: { event: QueuedEvent; offline: OfflineScop
       <dl className="my-2 flex flex-col gap-1">
         {fields.slice(0, 8).map((key) => (
           <div key={key} className="flex flex-wrap gap-x-2">
-            <dt className="font-bold">{key}:</dt>
+            <dt className="font-bold">{wordsOf(key)}:</dt>
             <dd>
-              mine {JSON.stringify(event.body[key])}, theirs{' '}
-              {JSON.stringify(event.current?.data[key] ?? null)}
+              mine {shown(event.body[key])}, theirs {shown(event.current?.data[key])}
             </dd>
           </div>
         ))}

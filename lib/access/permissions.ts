@@ -21,6 +21,8 @@ export const PLACES: Readonly<Record<string, Access>> = {
   '/_not-found': 'public',
   '/': 'public',
   '/icon.svg': 'public',
+  '/sw.js': 'public',
+  '/offline': 'public',
   '/sign-in': 'public',
   '/forgotten': 'public',
   '/new-password/[token]': 'public',

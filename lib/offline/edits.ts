@@ -1,4 +1,5 @@
 /** Edits on the device: shown at once, queued as events, coalesced while they have not been sent. */
+import { leftBehind, note } from './journal';
 import { changesBetween, withChanges } from './patch';
 import type { Entity } from './protocol';
 import type { OfflineStore, QueuedEvent } from './store';
@@ -28,6 +29,12 @@ function editedData(
 
 /** Applies an edit to the local copy and queues it. Typing on changes the event that still waits. */
 export async function putEntity(store: OfflineStore, edit: Edit): Promise<void> {
+  const strike = note(store.name, { edit });
+  await writeEdit(store, edit);
+  strike();
+}
+
+async function writeEdit(store: OfflineStore, edit: Edit): Promise<void> {
   const { scope, collection, id, archived = false } = edit;
   const kind = `${collection}.${archived ? 'archive' : 'put'}`;
   await store.transaction('rw', store.entities, store.queue, async () => {
@@ -75,7 +82,7 @@ export async function addHappening(
   happening: { scope: string; kind: string; body: Record<string, unknown> },
 ): Promise<string> {
   const id = crypto.randomUUID();
-  await store.queue.add({
+  const event: QueuedEvent = {
     id,
     scope: happening.scope,
     collection: 'happening',
@@ -85,8 +92,20 @@ export async function addHappening(
     baseVersion: null,
     at: now(),
     state: 'pending',
-  });
+  };
+  const strike = note(store.name, { event });
+  await store.queue.add(event);
+  strike();
   return id;
+}
+
+/** Writes what a tab that was closed in the middle of it had typed last. The same twice has the effect of once. */
+export async function writeLeftBehind(store: OfflineStore): Promise<void> {
+  await leftBehind(store.name, async (noted) => {
+    const { edit, event } = noted as { edit?: Edit; event?: QueuedEvent };
+    if (edit) await writeEdit(store, edit);
+    if (event && (await store.queue.where('id').equals(event.id).count()) === 0) await store.queue.add(event);
+  });
 }
 
 /** The person's choice on a conflict: send mine again on top of theirs. */

@@ -3,6 +3,7 @@
  * that nobody finds somebody else's work on a shared phone.
  */
 import Dexie, { type Table } from 'dexie';
+import { wipeJournal } from './journal';
 import type { Entity } from './protocol';
 
 export interface StoredEntity extends Entity {
@@ -71,6 +72,7 @@ export async function wipeOffline(force = false): Promise<boolean> {
     if (unsent > 0 && !force) clean = false;
     else await Dexie.delete(name);
   }
+  if (clean) wipeJournal();
   open.clear();
   return clean;
 }

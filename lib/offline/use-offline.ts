@@ -2,7 +2,7 @@
 /** React's side of the store: live entities, edits, and what the status line says. */
 import { useLiveQuery } from 'dexie-react-hooks';
 import { useCallback, useEffect, useMemo, useRef, useState } from 'react';
-import { writeSnapshot } from './edits';
+import { writeLeftBehind, writeSnapshot } from './edits';
 import type { Entity } from './protocol';
 import { type OfflineStore, offlineStore, type QueuedEvent, type StoredEntity } from './store';
 import { sendAll, type SyncOutcome } from './sync';
@@ -57,7 +57,7 @@ export function useOffline(options: {
   }, [store, scope, eventsUrl]);
 
   useEffect(() => {
-    void sync().then(pull);
+    void writeLeftBehind(store).then(sync).then(pull);
     const again = () => void sync().then(pull);
     const timer = setInterval(() => void sync(), RETRY_MS);
     window.addEventListener('online', again);
@@ -67,7 +67,7 @@ export function useOffline(options: {
       window.removeEventListener('online', again);
       window.removeEventListener('focus', again);
     };
-  }, [sync, pull]);
+  }, [store, sync, pull]);
 
   const timer = useRef<ReturnType<typeof setTimeout> | null>(null);
   const nudge = useCallback(() => {

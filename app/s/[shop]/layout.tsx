@@ -2,6 +2,7 @@ import { cookies } from 'next/headers';
 import type { ReactNode } from 'react';
 import { type NavItem } from '@/components/shell/plate-nav';
 import { ShopHeader } from '@/components/shell/header';
+import { OnThisDevice } from '@/components/shell/on-this-device';
 import { SignOut } from '@/components/shell/sign-out';
 import { type Theme, ThemeSwitch } from '@/components/ui/theme-switch';
 import { pageActor } from '@/lib/access/actor';
@@ -51,6 +52,7 @@ export default async function ShopLayout({
           </>
         }
       />
+      <OnThisDevice shopId={shop} membershipId={actor.membershipId} />
       {children}
     </>
   );

@@ -51,3 +51,6 @@ export function required<K extends keyof Env>(name: K): NonNullable<Env[K]> {
   if (value === undefined) throw new Error(`The environment lacks ${name}.`);
   return value as NonNullable<Env[K]>;
 }
+
+/** Names this build; set by next.config.mjs when it is made, and null while developing. */
+export const BUILD: string | null = process.env.LAMPWRIGHT_BUILD ?? null;

@@ -1,7 +1,14 @@
 /** The queue on the device: nothing is lost, nothing is sent twice, conflicts wait for a person. */
 import 'fake-indexeddb/auto';
-import { beforeEach, describe, expect, it } from 'vitest';
-import { addHappening, keepMine, putEntity, takeTheirs, writeSnapshot } from '@/lib/offline/edits';
+import { beforeEach, describe, expect, it, vi } from 'vitest';
+import {
+  addHappening,
+  keepMine,
+  putEntity,
+  takeTheirs,
+  writeLeftBehind,
+  writeSnapshot,
+} from '@/lib/offline/edits';
 import type { ClientEvent, Entity, EventAnswer } from '@/lib/offline/protocol';
 import { OfflineStore, wipeOffline } from '@/lib/offline/store';
 import { sendAll, sendBatch } from '@/lib/offline/sync';
@@ -158,6 +165,52 @@ describe('offline queue', () => {
     await edit('Unsent');
     expect(await wipeOffline()).toBe(false);
     expect(await wipeOffline(true)).toBe(true);
+  });
+});
+
+describe('a tab that is closed in the middle of a word', () => {
+  /** As browsers have it: written before the call returns, its keys enumerable. */
+  const fakeStorage = () => {
+    const kept: Record<string, string> = {};
+    const hidden = { enumerable: false };
+    return Object.defineProperties(kept, {
+      setItem: { ...hidden, value: (key: string, value: string) => void (kept[key] = value) },
+      getItem: { ...hidden, value: (key: string) => kept[key] ?? null },
+      removeItem: { ...hidden, value: (key: string) => void delete kept[key] },
+    });
+  };
+  const noted = (of: object) => Object.keys(of).filter((key) => key.startsWith('lampwright-journal-'));
+
+  it('leaves notes of what the store did not get to; the next tab writes them, in order, and strikes them out', async () => {
+    const kept = fakeStorage();
+    vi.stubGlobal('localStorage', kept);
+    await edit('Sto');
+    expect(noted(kept)).toEqual([]);
+    // Two more keys, and the tab is gone before either write: what it had noted stays, under its own name.
+    const before = await store.entities.get([scope, 'areas', id]);
+    const late = (name: string, at: number) =>
+      ((kept as Record<string, string>)[`lampwright-journal-${store.name}|a-closed-tab|${at}|000000000`] =
+        JSON.stringify({ edit: { scope, collection: 'areas', id, data: { name }, base: before?.data } }));
+    late('Stor', 2_000_000_000_001);
+    late('Store', 2_000_000_000_002);
+    await writeLeftBehind(store);
+    expect((await store.entities.get([scope, 'areas', id]))?.data).toEqual({ name: 'Store' });
+    expect(await store.queue.count()).toBe(1);
+    expect(noted(kept)).toEqual([]);
+    vi.unstubAllGlobals();
+  });
+
+  it('never writes a tick twice', async () => {
+    const kept = fakeStorage();
+    vi.stubGlobal('localStorage', kept);
+    const tick = await addHappening(store, { scope, kind: 'tick', body: { step: 's1' } });
+    const queued = await store.queue.where('id').equals(tick).first();
+    (kept as Record<string, string>)[`lampwright-journal-${store.name}|a-closed-tab|1|0`] = JSON.stringify({
+      event: { ...queued, seq: undefined },
+    });
+    await writeLeftBehind(store);
+    expect(await store.queue.count()).toBe(1);
+    vi.unstubAllGlobals();
   });
 });
 
