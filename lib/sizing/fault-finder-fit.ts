@@ -2,7 +2,8 @@
  * How well a cause explains the readings. Differences are taken in units of the meter's error, and what a tolerance
  * may explain is not held against a cause: generalised least squares, with the covariance of the readings
  * C = diag(meter error squared) + sum over tolerances of s * s' / 3, s being what one tolerance moves the readings by
- * (a third of the square of the half width is the variance of anything between the two ends).
+ * (a third of the square of the half width is the variance of anything between the two ends). s is that of the circuit
+ * as drawn, in proportion to what the faulty circuit reads there; so C differs between causes, and ln det C counts.
  */
 import { EngineError } from '@/lib/engine/contract';
 import { growingRow, lowest, lowestWhole } from './fault-finder-minimum';
@@ -41,39 +42,108 @@ function cholesky(C: readonly (readonly number[])[]): number[][] {
   return L;
 }
 
+/** Solves L * x = b from above. */
+function forward(L: readonly (readonly number[])[], b: readonly number[]): number[] {
+  const x: number[] = [];
+  L.forEach((row, i) => {
+    let left = b[i] ?? 0;
+    for (let j = 0; j < i; j++) left -= (row[j] ?? 0) * (x[j] ?? 0);
+    x.push(left / (row[i] ?? 1));
+  });
+  return x;
+}
+
+const dot = (a: readonly number[], b: readonly number[]) =>
+  a.reduce((sum, own, i) => sum + own * (b[i] ?? 0), 0);
+
+/** What a tolerance moves a figure by grows and shrinks with the figure: this many times at most. */
+const MOST_SCALE = 1000;
+
+const scaled = (moved: readonly number[], figure: number, drawn: number) => {
+  const scale = drawn === 0 ? 1 : Math.min(Math.abs(figure / drawn), MOST_SCALE);
+  return moved.map((own) => own * scale);
+};
+
+interface Errors {
+  /** Square root of the covariance. */
+  L: number[][];
+  /** What tolerances move each reading by in this circuit. */
+  moved: number[][];
+  /** ln of the covariance's determinant. */
+  size: number;
+}
+
+export interface Misfit {
+  /** Sum of squares of what the readings are off, in their errors. */
+  misfit: number;
+  /** The same, with what larger errors cost beside the circuit as drawn (-2 ln of the likelihood). */
+  cost: number;
+}
+
 export class Weighed {
-  private readonly L: number[][];
+  private readonly drawnSize: number;
 
   /**
    * @param errors of the meter, one a reading
-   * @param moved what each tolerance moves each reading by
+   * @param movedBy what the tolerances move a reading of the circuit as drawn by, tolerance by tolerance
    */
   constructor(
     readonly readings: readonly Reading[],
-    errors: readonly number[],
-    moved: readonly (readonly number[])[],
+    private readonly errors: readonly number[],
+    private readonly drawn: Solved,
+    private readonly movedBy: (quantity: Quantity) => number[],
   ) {
-    const C = errors.map((error, i) =>
-      errors.map((_, j) => {
-        const tolerances = moved.reduce((sum, s) => sum + ((s[i] ?? 0) * (s[j] ?? 0)) / 3, 0);
-        return tolerances + (i === j ? error * error : 0);
-      }),
+    this.moved = readings.map(movedBy);
+    this.drawnSize = this.errorsOf(drawn).size;
+  }
+  private readonly moved: readonly (readonly number[])[];
+
+  private errorsOf(solved: Solved): Errors {
+    const moved = this.readings.map((reading, i) =>
+      scaled(this.moved[i] ?? [], solved.read(reading), this.drawn.read(reading)),
     );
-    this.L = cholesky(C);
+    const L = cholesky(
+      moved.map((own, i) =>
+        moved.map((other, j) => dot(own, other) / 3 + (i === j ? (this.errors[i] ?? 0) ** 2 : 0)),
+      ),
+    );
+    return { L, moved, size: 2 * L.reduce((sum, row, i) => sum + Math.log(row[i] ?? 1), 0) };
   }
 
-  /** Sum of squares of what the readings are off; Infinity where the circuit gives no figure. */
-  misfit(solved: Solved): number {
-    const off: number[] = [];
-    let sum = 0;
-    this.readings.forEach((reading, i) => {
-      let left = reading.measured - solved.read(reading);
-      for (let j = 0; j < i; j++) left -= (this.L[i]?.[j] ?? 0) * (off[j] ?? 0);
-      const own = left / (this.L[i]?.[i] ?? 1);
-      off.push(own);
-      sum += own * own;
-    });
-    return Number.isFinite(sum) ? sum : Infinity;
+  /** Infinity where the circuit gives no figure. */
+  misfit(solved: Solved): Misfit {
+    const { L, size } = this.errorsOf(solved);
+    const off = forward(
+      L,
+      this.readings.map((reading) => reading.measured - solved.read(reading)),
+    );
+    const misfit = dot(off, off);
+    const cost = misfit + size - this.drawnSize;
+    return Number.isFinite(cost) ? { misfit, cost } : { misfit: Infinity, cost: Infinity };
+  }
+
+  /**
+   * What a further reading adds to telling two circuits apart: how far apart they are there, less what the readings
+   * taken say of that difference already, in the error that the meter and the tolerances then leave.
+   * @returns a function of the reading and its meter error
+   */
+  further(first: Solved, second: Solved) {
+    const { L, moved } = this.errorsOf(first);
+    const known = forward(
+      L,
+      this.readings.map((reading) => first.read(reading) - second.read(reading)),
+    );
+    return (quantity: Quantity, error: number): number => {
+      const figure = first.read(quantity);
+      const own = scaled(this.movedBy(quantity), figure, this.drawn.read(quantity));
+      const shared = forward(
+        L,
+        moved.map((other) => dot(other, own) / 3),
+      );
+      // Rounding must not make less than the meter's own error of it.
+      const left = Math.max(error * error + dot(own, own) / 3 - dot(shared, shared), error * error);
+      return Math.abs(figure - second.read(quantity) - dot(known, shared)) / Math.sqrt(left);
+    };
   }
 }
 
@@ -84,7 +154,7 @@ export interface Fit {
   value: number;
   solved: Solved;
   misfit: number;
-  /** Misfit with the price of what was fitted, and how unlikely that is beforehand. */
+  /** Cost with the price of what was fitted, and how unlikely that is beforehand. */
   score: number;
 }
 
@@ -127,13 +197,13 @@ function bestValue(
 function fitAt(family: Family, weighed: Weighed, place: number, near?: number): Fit | null {
   const misfitAt = (value: number) => {
     const solved = trySolve(family, place, value);
-    return solved ? weighed.misfit(solved) : Infinity;
+    return solved ? weighed.misfit(solved).cost : Infinity;
   };
   const value = bestValue(family, misfitAt, near);
   const solved = trySolve(family, place, value);
   if (!solved) return null;
-  const misfit = weighed.misfit(solved);
-  if (misfit === Infinity) return null;
+  const { misfit, cost } = weighed.misfit(solved);
+  if (cost === Infinity) return null;
   const fitted = (family.parameter ? 1 : 0) + ((family.grid?.length ?? 0) > 1 ? 1 : 0);
   return {
     family,
@@ -141,7 +211,7 @@ function fitAt(family: Family, weighed: Weighed, place: number, near?: number): 
     value,
     solved,
     misfit,
-    score: misfit + PRICE * fitted + (family.surprise?.(value) ?? 0),
+    score: cost + PRICE * fitted + (family.surprise?.(value) ?? 0),
   };
 }
 

@@ -6,7 +6,7 @@ export interface Minimum {
 }
 
 const GOLDEN = (3 - Math.sqrt(5)) / 2;
-const GRID = 8;
+const GRID = 12;
 const MAX_STEPS = 40;
 
 /** Vertex of the parabola through three points; NaN where they lie on a line or one has no figure. */
@@ -17,27 +17,14 @@ function vertex(a: Minimum, b: Minimum, c: Minimum): number {
 }
 
 /**
- * Between `low` and `high`: the lowest of a coarse row of points, then steps to the vertex of the parabola through
- * the three best, or by the golden section where that leads nowhere; ended when two parabolas agree with the best.
- * @param figure may be Infinity where there is none
- * @param width how near the place is wanted
- * @param points of the coarse row, less one
+ * The lowest point between two others that are no lower, by steps to the vertex of the parabola through the three, or
+ * by the golden section where that leads nowhere; ended when two parabolas agree with the best.
  */
-export function lowest(
+function bottom(
   figure: (x: number) => number,
-  low: number,
-  high: number,
+  [left, best, right]: readonly [Minimum, Minimum, Minimum],
   width: number,
-  points = GRID,
 ): Minimum {
-  const row = Array.from({ length: points + 1 }, (_, i): Minimum => {
-    const at = low + ((high - low) * i) / points;
-    return { at, least: figure(at) };
-  });
-  const i = row.reduce((best, { least }, n) => (least < (row[best]?.least ?? Infinity) ? n : best), 0);
-  let best = row[i] as Minimum;
-  let left = row[Math.max(0, i - 1)] as Minimum;
-  let right = row[Math.min(points, i + 1)] as Minimum;
   let agreed = 0;
   for (let step = 0; step < MAX_STEPS && right.at - left.at > width; step++) {
     let at = vertex(left, best, right);
@@ -57,6 +44,32 @@ export function lowest(
     else right = next;
   }
   return best;
+}
+
+/**
+ * Between `low` and `high`: a coarse row of points, then the bottoms of its two lowest valleys.
+ * @param figure may be Infinity where there is none
+ * @param width how near the place is wanted
+ * @param points of the row, less one
+ */
+export function lowest(
+  figure: (x: number) => number,
+  low: number,
+  high: number,
+  width: number,
+  points = GRID,
+): Minimum {
+  const row = Array.from({ length: points + 1 }, (_, i): Minimum => {
+    const at = low + ((high - low) * i) / points;
+    return { at, least: figure(at) };
+  });
+  const valleys = row
+    .map((own, i) => [row[i - 1] ?? own, own, row[i + 1] ?? own] as const)
+    .filter(([left, own, right]) => own.least <= left.least && own.least <= right.least)
+    .sort((a, b) => a[1].least - b[1].least);
+  const [first, second] = valleys.slice(0, 2).map((valley) => bottom(figure, valley, width));
+  if (!first) return row[0] as Minimum;
+  return second && second.least < first.least ? second : first;
 }
 
 /** Among whole numbers: the lowest of `grid` (sorted), then halving on both sides of it. */

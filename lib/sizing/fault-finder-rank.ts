@@ -1,9 +1,9 @@
 /** Which causes explain the readings, and which reading would tell the best ones apart. */
 import { type Fit, meterError, type MeterPct, Places, TOLD_APART, type Weighed } from './fault-finder-fit';
-import type { Model, Place, Quantity, Reading } from './fault-finder-model';
+import type { Model, Place, Quantity, Solved } from './fault-finder-model';
 
 const MOST_CAUSES = 12;
-/** In meter errors: less is no use to a crew. */
+/** In errors of the reading: less is no use to a crew. */
 const TELLS = 2;
 /** From here on an ordinary reading is preferred to one along a conductor, which needs long leads. */
 const TELLS_WELL = 4;
@@ -24,7 +24,7 @@ export interface NextReading extends Quantity {
   between: [number, number];
   /** What it would be under either. */
   under: [number, number];
-  /** How far apart these are, in meter errors. */
+  /** How far apart these are beyond what the readings taken tell, in errors of meter and tolerances. */
   apart: number;
 }
 
@@ -50,36 +50,32 @@ export const suspects = (candidates: readonly Candidate[]): Candidate[] =>
 
 export interface Asked {
   model: Model;
-  readings: readonly Reading[];
+  weighed: Weighed;
   meter: MeterPct;
-  /** As drawn. */
-  expected: (quantity: Quantity) => number;
-}
-
-function separation({ meter, expected }: Asked, quantity: Quantity, a: number, b: number): number {
-  return (
-    Math.abs(a - b) / meterError(meter, quantity, Math.max(Math.abs(a), Math.abs(b)), expected(quantity))
-  );
+  drawn: Solved;
 }
 
 type Telling = Omit<NextReading, 'between'>;
 
 /** All that was not read yet, with what it would be under the two fits. */
-function untaken(asked: Asked, first: Fit, second: Fit): Telling[] {
+function untaken({ model, weighed, meter, drawn }: Asked, first: Fit, second: Fit): Telling[] {
   const name = ({ at, index, quantity }: Quantity) => `${at} ${index} ${quantity}`;
-  const taken = new Set(asked.readings.map(name));
-  return asked.model.quantities
+  const taken = new Set(weighed.readings.map(name));
+  const further = weighed.further(first.solved, second.solved);
+  return model.quantities
     .filter((quantity) => !taken.has(name(quantity)))
     .map((quantity) => {
       const under: [number, number] = [first.solved.read(quantity), second.solved.read(quantity)];
-      return { ...quantity, under, apart: separation(asked, quantity, ...under) };
+      const most = Math.max(Math.abs(under[0]), Math.abs(under[1]));
+      const error = meterError(meter, quantity, most, drawn.read(quantity));
+      return { ...quantity, under, apart: further(quantity, error) };
     });
 }
 
 const furthest = (open: readonly Telling[]): Telling | null =>
   open.reduce<Telling | null>((best, own) => (own.apart > (best?.apart ?? 0) ? own : best), null);
 
-/** The reading whose figures under the two fits lie furthest apart in meter errors; null where none would do. */
+/** The reading that tells the two fits apart best; null where none would do. */
 function telling(asked: Asked, first: Fit, second: Fit): Telling | null {
   const open = untaken(asked, first, second);
   const ordinary = furthest(open.filter(({ at }) => ORDINARY.includes(at)));

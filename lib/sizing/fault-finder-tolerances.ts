@@ -3,11 +3,11 @@ import { EngineError } from '@/lib/engine/contract';
 import type { Model, Quantity, Solved } from './fault-finder-model';
 
 export interface Spread {
-  expected: number[];
+  drawn: Solved;
   /** All figures that each reading can have: as drawn, and at every end that was solved. */
   figures: number[][];
-  /** By tolerance, then by reading: half of what its two ends move it by. */
-  moved: number[][];
+  /** By tolerance: half of what its two ends move a reading by. */
+  movedBy: (quantity: Quantity) => number[];
   /** Ends at which the circuit has no operating point. */
   unsolved: number;
 }
@@ -20,16 +20,15 @@ export interface Spread {
 export function spreadOf(model: Model, quantities: readonly Quantity[]): Spread {
   const figures: number[][] = quantities.map(() => []);
   let unsolved = 0;
-  const take = (solved: Solved): number[] =>
-    quantities.map((quantity, i) => {
+  const take = (solved: Solved): Solved => {
+    quantities.forEach((quantity, i) => {
       const figure = solved.read(quantity);
       if (Number.isFinite(figure)) figures[i]?.push(figure);
-      return figure;
     });
-  const none = model.axes.map(() => 0);
-  const expected = take(model.solve(none));
-  const tried = new Set<string>();
-  const at = (ends: readonly number[]): number[] | null => {
+    return solved;
+  };
+  const drawn = take(model.solve(model.axes.map(() => 0)));
+  const at = (ends: readonly number[]): Solved | null => {
     try {
       return take(model.solve(ends));
     } catch (error) {
@@ -38,17 +37,19 @@ export function spreadOf(model: Model, quantities: readonly Quantity[]): Spread 
       return null;
     }
   };
-  const moved = model.axes.map((_, axis) => {
-    const [low, high] = [-1, 1].map((end) => at(none.with(axis, end)) ?? expected);
-    return expected.map((_own, i) => ((high?.[i] ?? 0) - (low?.[i] ?? 0)) / 2);
-  });
-  quantities.forEach((_, i) => {
-    const signs = moved.map((by) => Math.sign(by[i] ?? 0));
-    for (const ends of [signs, signs.map((sign) => -sign)]) {
-      if (tried.has(ends.join())) continue;
-      tried.add(ends.join());
-      at(ends);
+  const ends = model.axes.map((_, axis) =>
+    [-1, 1].map((end) => at(model.axes.map((_axis, i) => (i === axis ? end : 0))) ?? drawn),
+  );
+  const movedBy = (quantity: Quantity) =>
+    ends.map(([low, high]) => ((high ?? drawn).read(quantity) - (low ?? drawn).read(quantity)) / 2);
+  const tried = new Set<string>();
+  for (const quantity of quantities) {
+    const signs = movedBy(quantity).map(Math.sign);
+    for (const corner of [signs, signs.map((sign) => -sign)]) {
+      if (tried.has(corner.join())) continue;
+      tried.add(corner.join());
+      at(corner);
     }
-  });
-  return { expected, figures, moved, unsolved };
+  }
+  return { drawn, figures, movedBy, unsolved };
 }

@@ -81,8 +81,8 @@ export function workingOf(
     const unit = unitOf(next.quantity);
     steps.push({
       key: 'reading-apart',
-      name: 'How far the next reading tells two causes apart, in meter errors',
-      formula: '|a - b| / meter error',
+      name: 'How far the next reading tells two causes apart, in errors of the reading',
+      formula: '|a - b, less what the readings taken tell of it| / error of meter and tolerances',
       inputs: [
         given('at', `${next.at} ${next.index}`, ''),
         given('a', next.under[0], unit),

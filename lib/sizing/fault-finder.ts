@@ -116,21 +116,21 @@ function search(
 ): Searched {
   const model = inCircuit(() => modelOf(input, t, readings));
   const spread = inCircuit(() => spreadOf(model, readings));
+  const { drawn } = spread;
   const judged = readings.map(({ measured, ...quantity }, i): JudgedReading => {
     const band = bandOver(spread.figures[i] ?? [], meter[quantity.quantity]);
     const near = nearBand(band);
-    const expected = spread.expected[i] ?? 0;
+    const expected = drawn.read(quantity);
     const verdict = judge(band, measured);
     return { ...quantity, expected, ...band, nearLow: near.low, nearHigh: near.high, measured, verdict };
   });
-  const drawn = model.solve(model.axes.map(() => 0));
-  const errors = readings.map((own, i) => meterError(meter, own, own.measured, spread.expected[i] ?? 0));
-  const weighed = new Weighed(readings, errors, spread.moved);
-  const nothing = weighed.misfit(drawn);
+  const errors = readings.map((own) => meterError(meter, own, own.measured, drawn.read(own)));
+  const weighed = new Weighed(readings, errors, drawn, spread.movedBy);
+  const nothing = weighed.misfit(drawn).misfit;
   const wrong = judged.some(({ verdict }) => verdict !== 'in');
   const candidates = wrong ? candidatesOf(model, weighed, nothing) : [];
   const causes = candidates.map((candidate, i) => causeOf(candidate, readings.length, i + 1));
-  const next = nextReading({ model, readings, meter, expected: drawn.read }, candidates);
+  const next = nextReading({ model, weighed, meter, drawn }, candidates);
   return {
     result: { readings: judged, causes, nextReading: next },
     suspected: causes.slice(0, suspects(candidates).length),
@@ -144,7 +144,7 @@ function search(
  * exactly; its figure (and along a tape its place) is that which leaves least of the readings unexplained, in units of
  * the meter's error, beside what the tolerances may explain. Causes are ranked by what they leave plus 2 for each
  * figure or place fitted (Akaike); within 9 (three sigma) they are not told apart, and the reading whose figures under
- * the best two lie furthest apart in meter errors is named.
+ * the best two lie furthest apart, in the error that meter and tolerances leave beside the readings taken, is named.
  * @returns volts V, amps A, ohms, watts W
  * @throws {EngineError} `invalid-input` with the field, `too-large`, `no-solution` where the circuit as drawn has no
  * operating point.
