@@ -57,6 +57,7 @@ export const PLACES: Readonly<Record<string, Access>> = {
   '/s/[shop]/jobs/[job]/survey': 'work:edit',
   '/s/[shop]/jobs/[job]/circuits': 'work:edit',
   '/s/[shop]/jobs/[job]/circuits/[circuit]': 'work:edit',
+  '/s/[shop]/jobs/[job]/savings': 'price:see',
   '/s/[shop]/jobs/[job]/quote': 'price:see',
   '/s/[shop]/jobs/[job]/quote/preview': 'price:see',
   '/s/[shop]/jobs/[job]/quote/[document]': 'price:see',
@@ -74,6 +75,7 @@ export const PLACES: Readonly<Record<string, Access>> = {
 /** By file and exported name, as the build's server-reference manifest has them. */
 export const ACTIONS: Readonly<Record<string, Access>> = {
   'lib/customers/actions.ts#saveCustomer': 'customer:edit',
+  'lib/savings/actions.ts#saveSaving': 'work:edit',
   'lib/invoices/actions.ts#issueFinal': 'invoice:edit',
   'lib/invoices/actions.ts#issueDeposit': 'invoice:edit',
   'lib/invoices/actions.ts#voidOne': 'payment:refund',

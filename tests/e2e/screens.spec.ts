@@ -27,6 +27,7 @@ const SCREENS: [string, () => string, string][] = [
   ['survey', () => `/jobs/${job}/survey`, 'Back room'],
   ['circuits', () => `/jobs/${job}/circuits`, 'Back room lights'],
   ['bench work', () => `/jobs/${bench}/circuits`, 'Cabin array'],
+  ['savings', () => `/jobs/${job}/savings`, 'Energy before'],
   ['quote', () => `/jobs/${job}/quote`, 'New lighting'],
   ['money', () => `/jobs/${job}/money`, 'New lighting'],
   ['install', () => `/jobs/${job}/install`, 'New lighting'],

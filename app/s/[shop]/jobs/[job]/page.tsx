@@ -21,6 +21,7 @@ const PLACES: { path: string; label: string; about: string; needs: Permission; s
     steps: ['survey'],
   },
   { path: 'circuits', label: 'Circuits', about: 'Sized, drawn, checked', needs: 'work:edit', steps: [] },
+  { path: 'savings', label: 'Savings', about: 'Energy, money, payback', needs: 'price:see', steps: [] },
   { path: 'quote', label: 'Quote', about: 'Draft, send, answer', needs: 'price:see', steps: ['quote'] },
   {
     path: 'money',
@@ -54,7 +55,7 @@ export default async function JobPage({ params }: { params: Promise<{ shop: stri
         <JobLine steps={steps} size="large" />
         <p className="mt-3">{open ? `Next: ${open.label}, ${open.sub ?? ''}.` : 'This job is closed.'}</p>
       </Sheet>
-      <ul className="grid gap-4 sm:grid-cols-2 lg:grid-cols-5">
+      <ul className="grid gap-4 sm:grid-cols-2 lg:grid-cols-3 xl:grid-cols-6">
         {PLACES.filter((place) => may(actor, place.needs)).map((place) => (
           <li key={place.path} className="flex flex-col gap-2 rounded-md border border-rule bg-sheet p-4">
             <h2 className="text-2xl">{place.label}</h2>
