@@ -1,5 +1,6 @@
 /** Which causes explain the readings, and which reading would tell the best ones apart. */
-import { type Fit, meterError, type MeterPct, Places, TOLD_APART, type Weighed } from './fault-finder-fit';
+import { type Fit, Places, TOLD_APART } from './fault-finder-fit';
+import { meterError, type MeterPct, type Weighed } from './fault-finder-weighed';
 import type { Model, Place, Quantity, Solved } from './fault-finder-model';
 
 const MOST_CAUSES = 12;

@@ -1,7 +1,7 @@
 /** How bands, the best cause and the next reading were figured. */
 import type { WorkingInput, WorkingStep } from '@/lib/engine/contract';
 import type { FaultFinder } from './fault-finder';
-import type { MeterPct } from './fault-finder-fit';
+import type { MeterPct } from './fault-finder-weighed';
 import type { Tolerances } from './fault-finder-model';
 
 const given = (name: string, value: WorkingInput['value'], unit: string): WorkingInput => ({

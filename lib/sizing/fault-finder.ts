@@ -2,7 +2,8 @@
 import { defineCalculation, EngineError, type Limits, type Outcome } from '@/lib/engine/contract';
 import { bandOver, judge, nearBand, type Verdict } from './fault-finder-band';
 import { findingsOf } from './fault-finder-findings';
-import { type Fit, meterError, type MeterPct, Weighed } from './fault-finder-fit';
+import type { Fit } from './fault-finder-fit';
+import { meterError, type MeterPct, Weighed } from './fault-finder-weighed';
 import { arrayModel } from './fault-finder-array';
 import { type FaultFinderInput, meterOf, readingsOf, schema, tolerancesOf } from './fault-finder-input';
 import type { CauseCode, Family, Model, Quantity, Rail, Reading, Tolerances } from './fault-finder-model';
