@@ -17,6 +17,7 @@ const HEAVY = new Set([
   'series-string',
   'point-illuminance',
   'photometric-file',
+  'lumen-method',
   'branch-circuit',
 ]);
 const SECONDS = 2;

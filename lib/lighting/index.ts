@@ -2,11 +2,13 @@
 import type { Calculation } from '@/lib/engine/contract';
 import { energySavingCalculation } from './energy-saving';
 import { lumenMaintenanceCalculation } from './lumen-maintenance';
+import { lumenMethodCalculation } from './lumen-method';
 import { paybackCalculation } from './payback';
 import { photometricFileCalculation } from './photometric-file';
 import { pointIlluminanceCalculation } from './point-illuminance';
 
 export const lightingCalculations = [
+  lumenMethodCalculation,
   photometricFileCalculation,
   pointIlluminanceCalculation,
   energySavingCalculation,

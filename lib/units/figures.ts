@@ -99,6 +99,10 @@ export function formatFigure(value: number, unit: string, settings: FigureSettin
       return settings.units === 'us'
         ? { value: formatNumber(value / 0.3048, 1), unit: 'ft' }
         : { value: formatNumber(value, 2), unit: 'm' };
+    case 'W/m2':
+      return settings.units === 'us'
+        ? { value: formatNumber(value * 0.3048 ** 2), unit: 'W/ft²' }
+        : { value: formatNumber(value), unit: 'W/m²' };
     case 'minor': {
       const money = { ...DEFAULT_SETTINGS, ...settings };
       return { value: formatMoney(Math.round(value), money, { symbol: false }), unit: money.currency };

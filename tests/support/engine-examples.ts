@@ -235,6 +235,22 @@ export const EXAMPLES: Readonly<Record<string, Record<string, unknown>>> = {
     breaker: { amps: 20 },
     hazards: { sharedNeutral: 'no', noIsolationPoint: 'no' },
   },
+  'lumen-method': {
+    lengthMetres: 16,
+    widthMetres: 11,
+    mountingMetres: 2.15,
+    photometry: { source: 'cosine', lumens: 5000 },
+    reflectances: { ceiling: 0.7, walls: 0.5, floor: 0.2 },
+    ceilingCavityMetres: 0.4,
+    floorCavityMetres: 0.75,
+    lumensPerLuminaire: 5100,
+    wattsPerLuminaire: 38,
+    lightLossFactor: 0.8,
+    targetLux: 500,
+    spacingRatioMax: 1.5,
+    layout: { rows: 4, columns: 5 },
+    allowance: { wattsPerSquareMetre: 6.57, basis: 'ANSI/ASHRAE/IES 90.1-2019, Table 9.6.1' },
+  },
   'photometric-file': {
     text: [
       'IESNA:LM-63-2002',

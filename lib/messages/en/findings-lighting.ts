@@ -1,5 +1,38 @@
 /** Findings and working steps of the lumen method, energy, money over time and lumen maintenance. */
 export const lightingFindings = {
+  'finding.lumen-no-light.title': 'No light reaches the plane',
+  'finding.lumen-no-light.body':
+    'With a utilisation factor of {utilisationFactor} no number of these luminaires lights the room. The file may hold no light, or shine upwards at a dark ceiling.',
+  'finding.lumen-under-target.title': 'Less light than wanted',
+  'finding.lumen-under-target.body':
+    '{quantity, plural, one {One luminaire gives} other {# luminaires give}} {lux:lx}; {wantedLux:lx} are wanted. It takes {neededQuantity}.',
+  'finding.lumen-over-target.title': 'Far more light than wanted',
+  'finding.lumen-over-target.body':
+    '{quantity, plural, one {One luminaire} other {# luminaires}} of {lumens} lm give {lux:lx}; {wantedLux:lx} are wanted. Use fewer or weaker ones, or dim them.',
+  'finding.lumen-layout-other-quantity.title': 'Layout of another number',
+  'finding.lumen-layout-other-quantity.body':
+    'Rows times columns make {inLayout} luminaires; the figures are for {quantity}.',
+  'finding.lumen-spacing-too-wide.title': 'Luminaires too far apart',
+  'finding.lumen-spacing-too-wide.body':
+    'They hang {spacingMetres:m} apart; at this height {mostMetres:m} is the most. Use more rows or columns, or a wider beam.',
+  'finding.lumen-too-few-to-space.title': 'Too few to spread evenly',
+  'finding.lumen-too-few-to-space.body':
+    'At most {mostMetres:m} apart the room takes {neededQuantity} luminaires; {quantity} would leave dark places. Use more, weaker ones, or a wider beam.',
+  'finding.lumen-loss-factor-unusual.title': 'Unusual light loss factor',
+  'finding.lumen-loss-factor-unusual.body':
+    'Light loss is taken as {lightLossFactor}; from {least} in very dirty rooms to {most} in clean ones is usual. Say what it stands on.',
+  'finding.lumen-utilisation-over-one.title': 'More light than the luminaires give',
+  'finding.lumen-utilisation-over-one.body':
+    'A utilisation factor of {utilisationFactor} holds only for large rooms with very bright surfaces. Look at the table again.',
+  'finding.lumen-cavity-beyond-tables.title': 'Room beyond the tables',
+  'finding.lumen-cavity-beyond-tables.body':
+    'The room cavity ratio is {roomCavityRatio}; the method’s tables end at {most}. Figure it point by point.',
+  'finding.lumen-file-other-lumens.title': 'Photometry of other lumens',
+  'finding.lumen-file-other-lumens.body':
+    'The photometry gives {fileLumens} lm, the luminaire {lumensPerLuminaire} lm. Only the shape of its light is used; see that it is the same optics.',
+  'finding.lumen-power-over-allowance.title': 'More power than allowed',
+  'finding.lumen-power-over-allowance.body':
+    '{wattsPerSquareMetre:W/m2} are installed; {allowed:W/m2} are allowed for this space. Use fewer or more efficient luminaires.',
   'finding.energy-peak-not-counted.title': 'Peak not counted',
   'finding.energy-peak-not-counted.body':
     'The connected load falls by {demandKilowattsSaved} kW, and no demand charge is counted as saved. Say how much of it burns during the billed peak; lights outdoors at night do not.',
@@ -81,6 +114,15 @@ export const lightingFindings = {
 } as const;
 
 export const lightingWorking = {
+  'working.lumen-room-index': 'Room index',
+  'working.lumen-room-cavity-ratio': 'Room cavity ratio',
+  'working.lumen-utilisation-table': 'Utilisation factor from the table',
+  'working.lumen-direct-ratio': 'Share of the downward light that arrives directly',
+  'working.lumen-utilisation': 'Utilisation factor',
+  'working.lumen-quantity-exact': 'Luminaires, exact',
+  'working.lumen-lux': 'Maintained illuminance',
+  'working.lumen-power-density': 'Watts a square metre',
+  'working.lumen-max-spacing': 'Largest spacing',
   'working.energy-before': 'Energy before',
   'working.energy-after': 'Energy after',
   'working.energy-net': 'Energy saved with heating and cooling',

@@ -27,7 +27,7 @@ const rows = readFileSync(new URL('findings.jsonl', import.meta.url), 'utf8')
   .map((line) => JSON.parse(line) as Row);
 
 /** Said with every answer of the calculations that carry them: what they are is the reason, not a figure. */
-const ALWAYS = new Set(['field-built', 'point-direct-only']);
+const ALWAYS = new Set(['field-built', 'point-direct-only', 'maintenance-of-the-leds-alone']);
 
 /**
  * Never overridden: what the design names (overcurrent device above the conductor's limit, disconnection time, voltage
