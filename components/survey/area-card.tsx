@@ -135,6 +135,8 @@ export function AreaCard({
           <Hazards area={area.data} set={set} />
           <PhotoStrip
             base={survey.photosUrl}
+            store={survey.offline.store}
+            scope={survey.offline.scope}
             subject={{ type: 'area', id: area.id }}
             name={area.data.name}
             settings={survey.settings}

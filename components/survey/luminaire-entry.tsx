@@ -219,6 +219,8 @@ export function LuminaireEntry({ one, survey }: { one: Kept<Luminaire>; survey: 
         <summary className="min-h-touch py-2.5">One opened, photographed</summary>
         <PhotoStrip
           base={survey.photosUrl}
+          store={survey.offline.store}
+          scope={survey.offline.scope}
           subject={{ type: 'existing-luminaire', id: one.id }}
           name={one.data.luminaireType}
           settings={survey.settings}

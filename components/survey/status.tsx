@@ -65,12 +65,13 @@ function Conflict({ event, offline }: { event: QueuedEvent; offline: OfflineScop
   );
 }
 
-export function SyncStatus({ offline }: { offline: OfflineScope }) {
+export function SyncStatus({ offline, photos = 0 }: { offline: OfflineScope; photos?: number }) {
   const refused = offline.queue.filter((event) => event.state === 'refused');
   return (
     <div className="flex flex-col gap-3">
       <p role="status" className="text-sm text-ink-2">
         {statusText(offline)}
+        {photos > 0 ? ` ${photos} ${photos === 1 ? 'photo' : 'photos'} to send.` : ''}
       </p>
       {offline.queue
         .filter((event) => event.state === 'conflict')

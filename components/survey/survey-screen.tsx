@@ -4,6 +4,7 @@ import { useState } from 'react';
 import { Button, ButtonLink } from '@/components/ui/button';
 import { EmptyState, Sheet } from '@/components/ui/sheet';
 import { finishSurvey } from '@/lib/jobs/actions';
+import { usePhotoSender } from '@/lib/offline/use-photos';
 import { NO_AREA_DETAILS } from '@/lib/surveys/schema/details';
 import { AreaCard } from './area-card';
 import { SyncStatus } from './status';
@@ -105,10 +106,11 @@ function Finish({ survey, shopId, jobId }: { survey: Survey; shopId: string; job
 export function SurveyScreen(props: { shopId: string; membershipId: string; jobId: string }) {
   const survey = useSurvey(props);
   const [open, setOpen] = useState<string | null>(null);
+  const photos = usePhotoSender(survey.offline.store, survey.offline.scope, survey.photosUrl);
   if (!survey.ready) return <p role="status">Opening what is kept on this device.</p>;
   return (
     <div className="flex flex-col gap-5">
-      <SyncStatus offline={survey.offline} />
+      <SyncStatus offline={survey.offline} photos={photos} />
       {survey.areas.length === 0 ? (
         <Sheet title="Areas">
           <EmptyState>

@@ -4,6 +4,7 @@
  */
 import Dexie, { type Table } from 'dexie';
 import { wipeJournal } from './journal';
+import type { QueuedPhoto } from './photos';
 import type { Entity } from './protocol';
 
 export interface StoredEntity extends Entity {
@@ -36,6 +37,7 @@ export class OfflineStore extends Dexie {
   entities!: Table<StoredEntity, [string, string, string]>;
   queue!: Table<QueuedEvent, number>;
   meta!: Table<{ key: string; value: unknown }, string>;
+  photos!: Table<QueuedPhoto, string>;
 
   constructor(shopId: string, personId: string) {
     super(`${STORE_PREFIX}${shopId}-${personId}`);
@@ -44,6 +46,7 @@ export class OfflineStore extends Dexie {
       queue: '++seq, &id, scope, [scope+entityId]',
       meta: 'key',
     });
+    this.version(2).stores({ photos: 'id, scope, [scope+subjectId]' });
   }
 }
 
@@ -65,9 +68,8 @@ export async function wipeOffline(force = false): Promise<boolean> {
   let clean = true;
   for (const name of names) {
     const store = await new Dexie(name).open();
-    const unsent = store.tables.some((table) => table.name === 'queue')
-      ? await store.table('queue').count()
-      : 0;
+    const kept = store.tables.filter(({ name: table }) => table === 'queue' || table === 'photos');
+    const unsent = (await Promise.all(kept.map((table) => table.count()))).reduce((sum, own) => sum + own, 0);
     store.close();
     if (unsent > 0 && !force) clean = false;
     else await Dexie.delete(name);

@@ -1,6 +1,6 @@
 import { z } from 'zod';
 
-export const PHOTO_MAX_BYTES = 20 * 1024 * 1024;
+export { PHOTO_MAX_BYTES } from '@/lib/offline/photos';
 
 /** What a photo shows, from the address of the upload: the body is the file itself. */
 export const photoQuery = z.object({

@@ -79,6 +79,13 @@ test('a survey goes on with the server stopped, and is sent once', async ({ brow
   await expect(page.getByText(/^No signal\. Kept on this device, 2 changes to send/)).toBeVisible();
   await look(page, 'survey-no-signal');
 
+  // A photo that is taken now is kept whole, and shown.
+  await page.getByRole('button', { name: 'Open Loading bay' }).click();
+  await page.getByLabel('Add a photo').last().setInputFiles('tests/e2e/pictures/customer.png');
+  await expect(page.getByRole('img', { name: 'Photo of Loading bay, not sent yet' })).toBeVisible();
+  await expect(page.getByText(/1 photo to send\./)).toBeVisible();
+  await page.getByRole('button', { name: /^Fold up/ }).click();
+
   // The tab is closed in the middle of a word, and the survey opened in another.
   await page.getByRole('button', { name: 'Open Loading bay' }).click();
   await page.getByLabel('Notes', { exact: true }).last().pressSequentially('Door is stuck, ask for the');
@@ -105,6 +112,13 @@ test('a survey goes on with the server stopped, and is sent once', async ({ brow
   // Each event was applied once: every one raised its area's version by one.
   const made = areas.filter(({ data }) => ['Cold store', 'Loading bay'].includes(String(data['name'])));
   expect((await events()).length - before).toBe(made.reduce((sum, { version }) => sum + version, 0));
+  const photos = () =>
+    withShop(shop.shopId, () =>
+      select<{ subject: string }>('select subject_id as subject from photos where job_id = $1', [job]),
+    );
+  await expect.poll(async () => (await photos()).length, { timeout: 20_000 }).toBe(1);
+  expect(await photos()).toEqual([{ subject: made.find(({ data }) => data['name'] === 'Loading bay')?.id }]);
+  await expect(page.getByText(/photo to send/)).toBeHidden();
   await context.close();
 });
 
