@@ -58,7 +58,7 @@ export interface LumenMaintenance {
   /** Decay per hour. */
   alpha: number;
   b: number;
-  /** ln(b / threshold) / alpha; null without decay. */
+  /** ln(b / threshold) / alpha, not under 0; null without decay. */
   calculatedHours: number | null;
   /** What may be told: capped by the test's hours, or read within the test. */
   reportedHours: number;
@@ -115,7 +115,7 @@ export function lumenMaintenance(input: LumenMaintenanceInput): Projection {
   const { alpha, b, durationHours } = curve;
   const capTimes = sampleSize >= CAP.manyFrom ? CAP.many : CAP.few;
   const capHours = capTimes * durationHours;
-  const calculatedHours = alpha > 0 ? Math.log(b / threshold) / alpha : null;
+  const calculatedHours = alpha > 0 ? Math.max(0, Math.log(b / threshold) / alpha) : null;
   const own = curve.between === null ? curve.fits[0] : undefined;
   const passedAtHours = own ? passedAt(own.readings, threshold) : null;
   // Light that is still above the threshold when the test ends has lasted that long, whatever the curve says.

@@ -104,6 +104,14 @@ describe('figures', () => {
     expect(figures({ points, threshold: 0.7 }).passedAtHours).toBeNull();
   });
 
+  it('light that starts under the threshold lasts no hours, rather than less than none', () => {
+    expect(figures({ points: falling(1e-5, 0.6) })).toMatchObject({
+      calculatedHours: 0,
+      reportedHours: 0,
+      capped: false,
+    });
+  });
+
   it('light that is above the threshold when the test ends has lasted that long', () => {
     const points = falling(1e-5).map((one) => ({ ...one }));
     points[6] = { hours: 6000, maintenance: 0.9401 };

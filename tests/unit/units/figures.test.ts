@@ -57,6 +57,7 @@ describe('formatFigure', () => {
     [4700, 'ohm', '4.7 kΩ'],
     [0.00828, 'ohm/m', '8.28 mΩ/m'],
     [3.04, '%', '3.0 %'],
+    [6.889, 'W/m2', '6.889 W/m²'],
     [25, 'C', '25 °C'],
     [1.5, 'mm2', '1.5 mm²'],
     [123456, 'minor', '1,234.56 GBP'],
@@ -66,6 +67,7 @@ describe('formatFigure', () => {
     expect(shown(25, 'C', US)).toBe('77 °F');
     expect(shown(3.048, 'm', US)).toBe('10.0 ft');
     expect(shown(3.048, 'm')).toBe('3.05 m');
+    expect(shown(6.889, 'W/m2', US)).toBe('0.64 W/ft²');
   });
 });
 
