@@ -11,6 +11,7 @@ import { Coves } from './coves';
 import { ChoiceField, LengthField, LineField, NotesField, TemperatureField } from './fields';
 import { Hazards } from './hazards';
 import { Hours } from './hours';
+import { Light } from './light';
 import { Luminaires } from './luminaires';
 import { Readings } from './readings';
 import type { Kept, Survey } from './use-survey';
@@ -132,6 +133,7 @@ export function AreaCard({
           <ChangeLines areaId={area.id} survey={survey} />
           <AreaDetailsFields area={area.data} survey={survey} set={set} />
           <Readings areaId={area.id} survey={survey} />
+          <Light area={area} survey={survey} set={set} />
           <Hazards area={area.data} set={set} />
           <PhotoStrip
             base={survey.photosUrl}

@@ -8,7 +8,7 @@
 import * as z from 'zod/mini';
 
 /** Version stamped on every answer and stored with it. Raise it when any figure or choice can change. */
-export const ENGINE_VERSION = '0.1.0';
+export const ENGINE_VERSION = '0.2.0';
 
 /** Relative margin within which two figures count as equal wherever something is rounded up or compared. */
 export const REL = 1e-9;

@@ -71,6 +71,14 @@ test('an area in depth', async ({ page, context }) => {
   await page.getByLabel('Meter', { exact: true }).fill('Lux meter 7');
   await page.getByRole('button', { name: 'Add a reading' }).click();
   await expect(page.getByLabel('Meter', { exact: true }).last()).toHaveValue('Lux meter 7');
+  // A stockroom of 12' 8" by 9' under two-by-two panels: the lumen method answers while one types.
+  await page.locator('summary', { hasText: /^Light$/ }).click();
+  await expect(page.getByText(/^Still needed: .*a luminaire with its lumens/)).toBeVisible();
+  await page.getByLabel('Lit for').selectOption({ label: 'Dispatch, packing, handling' });
+  await page.getByLabel('Lit with').selectOption({ label: 'Flat panel 2 x 2 ft, 24 W' });
+  await expect(page.getByLabel('Target', { exact: true })).toHaveValue('28');
+  await expect(page.getByText('Maintained light')).toBeVisible();
+  await expect(page.getByText('Measured before: 29 fc, mean of 1 point.')).toBeVisible();
   await look(page, 'survey-area');
 
   await page.getByRole('button', { name: 'Add an account' }).click();

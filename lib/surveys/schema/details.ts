@@ -39,6 +39,30 @@ const dayHours = z
   .array(z.number().check(z.minimum(0, 'must not be negative'), z.maximum(24, 'a day has 24 hours')))
   .check(z.length(7, 'needs seven days'));
 
+/** What light the area is to have, and by what. */
+const light = z.strictObject({
+  /** As the table of targets names it. */
+  use: short(120),
+  targetLux: z._default(
+    z.nullable(z.number().check(z.positive('must be greater than zero'), z.maximum(100_000, 'is too much'))),
+    null,
+  ),
+  partId: z._default(z.nullable(z.uuid()), null),
+  quantity: z._default(
+    z.nullable(z.number().check(z.int('must be a whole number'), z.minimum(1), z.maximum(100_000))),
+    null,
+  ),
+  utilisationFactor: z._default(
+    z.nullable(z.number().check(z.positive('must be greater than zero'), z.maximum(1.5))),
+    null,
+  ),
+  /** Share of the first light that is left when lamps are old and dirty. */
+  lossFactor: z._default(
+    z.number().check(z.positive('must be greater than zero'), z.maximum(1, 'must be at most 100 %')),
+    0.8,
+  ),
+});
+
 export const areaDetails = z.strictObject({
   /** Of the luminaires, over the floor. */
   mountingMetres: metres,
@@ -58,6 +82,7 @@ export const areaDetails = z.strictObject({
   controls: z._default(z.enum(CONTROLS), 'unknown'),
   panel: short(60),
   circuitNumber: short(60),
+  light: z.prefault(light, {}),
   dayHours: z._default(z.nullable(dayHours), null),
   weeksPerYear: z._default(
     z.nullable(z.number().check(z.minimum(0, 'must not be negative'), z.maximum(53, 'a year has 52 weeks'))),
