@@ -1,5 +1,5 @@
 /** IEC basis: mm2 sizes by the tables of IEC 60364-5-52, Ib <= In <= Iz, and the fault loop where Ze is given. */
-import { atMost, type Finding, refuse, type WorkingStep } from '@/lib/engine/contract';
+import { atLeast, atMost, type Finding, refuse, type WorkingStep } from '@/lib/engine/contract';
 import { caution, note } from '@/lib/engine/finding';
 import { conductorResistance } from './conductor-resistance';
 import { dropOf, type Ladder, type Rung } from './conductor-ladder';
@@ -111,7 +111,8 @@ function rungOf(c: IecCase, size: string): Rung {
     carries: device !== null && ampacity > 0 && atMost(c.request.amps, device) && atMost(device, ampacity),
     ...dropOf(c.request, size, c.celsius),
     zsOhms,
-    faultFits: zsOhms === null || (c.zsMaxOhms !== null && atMost(zsOhms, c.zsMaxOhms)),
+    // Without a device there is nothing that could trip: `carries` says so already.
+    faultFits: zsOhms === null || c.zsMaxOhms === null || atMost(zsOhms, c.zsMaxOhms),
   };
 }
 
@@ -119,7 +120,7 @@ function findingsOf(c: IecCase): Finding[] {
   const { request, insulation } = c;
   const findings: Finding[] = [];
   const terminals = request.terminalCelsius ?? TERMINAL_CELSIUS;
-  if (terminals < CONDUCTOR_CELSIUS[insulation])
+  if (!atLeast(terminals, CONDUCTOR_CELSIUS[insulation]))
     findings.push(
       caution(
         'terminals-below-insulation',

@@ -1,6 +1,12 @@
 /** 2. Voltage drop along one cable. */
 import * as z from 'zod/mini';
-import { defineCalculation, type Finding, type Outcome, type WorkingStep } from '@/lib/engine/contract';
+import {
+  atLeast,
+  defineCalculation,
+  type Finding,
+  type Outcome,
+  type WorkingStep,
+} from '@/lib/engine/contract';
 import { conductorResistance } from './conductor-resistance';
 import { celsius, conductorSize, notNegative, positive, stranding, system } from './inputs';
 import type { Stranding } from './tables/conductors';
@@ -70,7 +76,7 @@ export function voltageDrop(input: VoltageDropInput): VoltageDrop {
 }
 
 function findingsOf(input: VoltageDropInput, result: VoltageDrop): Finding[] {
-  if (result.loadVolts > 0) return [];
+  if (!atLeast(result.dropVolts, input.volts)) return [];
   return [
     {
       code: 'drop-exceeds-supply',

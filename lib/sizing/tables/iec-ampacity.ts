@@ -4,6 +4,8 @@
  * Tables B.52.2 (PVC, two loaded conductors), B.52.3 (XLPE, two), B.52.4 (PVC, three), B.52.5 (XLPE, three): copper,
  * 30 C in air, by reference method. B.52.14: ambient in air. B.52.17 item 1: circuits bunched, embedded or enclosed.
  */
+import { atMost } from '@/lib/engine/contract';
+
 export type Insulation = 'PVC70' | 'XLPE90';
 export const REFERENCE_METHODS = ['A1', 'A2', 'B1', 'B2', 'C'] as const;
 export type ReferenceMethod = (typeof REFERENCE_METHODS)[number];
@@ -126,7 +128,7 @@ export const IEC_GROUPED: Steps = [
 export const MOST_GROUPED = 20;
 
 /** Between two listed figures the harder one; null above the last. */
-const listed = (steps: Steps, at: number) => steps.find(([to]) => at <= to)?.[1] ?? null;
+const listed = (steps: Steps, at: number) => steps.find(([to]) => atMost(at, to))?.[1] ?? null;
 
 /** Ca: factor for ambient air other than 30 C; null where the insulation has nothing left. */
 export const iecAmbientFactor = (insulation: Insulation, ambientCelsius: number) =>

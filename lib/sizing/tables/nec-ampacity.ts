@@ -7,6 +7,8 @@
  * Table 310.15(C)(1): more than three current-carrying conductors.
  * 240.4(D): small conductors.
  */
+import { atMost } from '@/lib/engine/contract';
+
 export type Column = 60 | 75 | 90;
 export const COLUMNS: readonly Column[] = [60, 75, 90];
 
@@ -85,7 +87,7 @@ const NEC_COUNT: readonly { to: number; factor: number }[] = [
 
 /** Ambient factor of the band that holds the temperature; between two bands the hotter. null: none is listed. */
 export function necAmbientFactor(insulation: Column, ambientCelsius: number): number | null {
-  return NEC_AMBIENT.find(({ to }) => ambientCelsius <= to)?.[insulation] ?? null;
+  return NEC_AMBIENT.find(({ to }) => atMost(ambientCelsius, to))?.[insulation] ?? null;
 }
 
 /** Factor for the number of current-carrying conductors in one raceway or cable. */
@@ -95,8 +97,8 @@ export function necCountFactor(conductors: number): number {
 
 /** Class 2 DC source, Chapter 9 Table 11(B): to 20 V 5 A, over 20 to 60 V 100/V A; none above. */
 export function classTwoLimitAmps(volts: number): number | null {
-  if (volts <= 20) return 5;
-  return volts <= 60 ? 100 / volts : null;
+  if (atMost(volts, 20)) return 5;
+  return atMost(volts, 60) ? 100 / volts : null;
 }
 
 /** Output circuit of a low-voltage lighting system, 411.6 (2023). */
