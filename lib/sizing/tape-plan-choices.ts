@@ -77,8 +77,8 @@ interface Maker {
 }
 
 /** Every way to feed the piece from the place, cheapest first. */
-function variantsOf(
-  { input, offer }: Maker,
+export function variantsOf(
+  { input, offer }: Pick<Maker, 'input' | 'offer'>,
   run: PlanRun,
   at: PlanRun['places'][number],
   first: number,
@@ -142,7 +142,7 @@ const cheapestDriver = (bins: readonly Bin[], site: number, cuts: number): numbe
   );
 
 /** Most sections that a run is cut into. */
-function mostSections({ limits, tape }: TapePlanInput, run: PlanRun, cuts: number): number {
+export function mostSections({ limits, tape }: TapePlanInput, run: PlanRun, cuts: number): number {
   const longest = Math.min(limits.longestRunMetres ?? Infinity, 2 * (tape.maxRunMetres ?? Infinity));
   return Math.min(cuts, limits.maxSections ?? Math.max(MAX_SECTIONS, Math.ceil((2 * run.metres) / longest)));
 }

@@ -8,12 +8,13 @@ import {
   refuse,
 } from '@/lib/engine/contract';
 import { checkNames, choicesOf } from './tape-plan-choices';
-import { offerFindings, planFindings, stopsOf } from './tape-plan-findings';
+import { offerFindings, planFindings } from './tape-plan-findings';
 import { type TapePlanInput, tapePlanSchema } from './tape-plan-input';
 import { offerOf } from './tape-plan-offer';
 import { type Case, NO_PLAN, resultOf, type TapePlan } from './tape-plan-result';
 import { cheapestPlan, type Effort } from './tape-plan-search';
 import { SectionCheck } from './tape-plan-section';
+import { stopsOf } from './tape-plan-stops';
 import { workingOf } from './tape-plan-working';
 
 export type { TapePlan } from './tape-plan-result';
