@@ -1,9 +1,8 @@
 'use client';
-import { signOut } from 'next-auth/react';
 import { useState } from 'react';
 import { Button } from '@/components/ui/button';
-import { forgetPersons } from '@/lib/offline/person';
-import { wipeOffline } from '@/lib/offline/store';
+import { hasUnsent } from '@/lib/offline/store';
+import { leaveDevice } from './leave-device';
 
 /** Nothing of a person stays on the device; what was never sent does, or goes only on their word. */
 export function SignOut() {
@@ -11,14 +10,14 @@ export function SignOut() {
   const [unsent, setUnsent] = useState(false);
   const leave = async (force: boolean) => {
     setPending(true);
-    const clean = await wipeOffline(force).catch(() => true);
-    if (!clean && !unsent) {
+    if (!force && !unsent && (await hasUnsent().catch(() => false))) {
       setUnsent(true);
       setPending(false);
       return;
     }
-    forgetPersons();
-    await signOut({ callbackUrl: '/sign-in' });
+    await leaveDevice(force);
+    // The server answers with the sign-in page; where there is none, the device with a page of nobody's.
+    window.location.reload();
   };
   return (
     <div className="flex flex-col gap-3">

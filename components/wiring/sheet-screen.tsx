@@ -8,7 +8,7 @@ import type { SheetCircuit } from '@/lib/wiring/schema/sheet';
 import { Cautions, DeadProved } from './cautions';
 import { Readings } from './reading';
 import { Say } from './say';
-import { Refused, SheetStatus } from './sheet-status';
+import { Refused, SheetStatus, SheetSync } from './sheet-status';
 import { SignOff } from './sign-off';
 import { Steps } from './steps';
 import { type SheetOnPhone, useSheet } from './use-sheet';
@@ -94,6 +94,7 @@ export function SheetScreen(ids: { shopId: string; membershipId: string; sheetId
           </ButtonLink>
         </Notice>
       ) : null}
+      <SheetSync offline={offline} settings={sheet.settings} />
       <Refused offline={offline} />
       <Cautions sheet={sheet} />
       <DeadProved sheet={sheet} />

@@ -1,14 +1,20 @@
 'use client';
 /** What is kept on this phone and not sent yet, and what the server did not take. */
-import { Button } from '@/components/ui/button';
+import { NotKept, SinceWhen } from '@/components/offline/since-when';
+import { Button, ButtonLink } from '@/components/ui/button';
 import { Notice } from '@/components/ui/sheet';
+import { dropMine, tryAgain } from '@/lib/offline/decide';
+import type { QueuedEvent } from '@/lib/offline/store';
 import type { OfflineScope } from '@/lib/offline/use-offline';
 import { message } from '@/lib/messages';
+import type { ShopSettings } from '@/lib/units/settings';
 
 function connection({ outcome }: OfflineScope): string {
   if (outcome === 'offline') return message('wiring.status.no-signal');
   if (outcome === 'signed-out') return message('wiring.status.signed-out');
   if (outcome === 'outdated') return message('wiring.status.outdated');
+  if (outcome === 'not-allowed') return message('wiring.status.not-allowed');
+  if (outcome === 'failed') return message('wiring.status.failed');
   return '';
 }
 
@@ -29,9 +35,8 @@ export function SheetStatus({ offline }: { offline: OfflineScope }) {
 
 /** Refused events stay until somebody has read why. */
 export function Refused({ offline }: { offline: OfflineScope }) {
-  const drop = async (seq: number | undefined) => {
-    if (seq !== undefined) await offline.store.queue.delete(seq);
-  };
+  const choose = (choice: typeof dropMine, event: QueuedEvent) =>
+    void choice(offline.store, event).then(offline.nudge);
   return offline.queue
     .filter((event) => event.state === 'refused')
     .map((event) => (
@@ -48,9 +53,29 @@ export function Refused({ offline }: { offline: OfflineScope }) {
             {issue.path}: {issue.message}
           </p>
         ))}
-        <Button look="secondary" className="mt-2" onClick={() => void drop(event.seq)}>
-          {message('wiring.refused.drop')}
-        </Button>
+        <div className="mt-2 flex flex-wrap gap-3">
+          <Button look="secondary" onClick={() => choose(tryAgain, event)}>
+            {message('wiring.refused.again')}
+          </Button>
+          <Button look="secondary" onClick={() => choose(dropMine, event)}>
+            {message('wiring.refused.drop')}
+          </Button>
+        </div>
       </Notice>
     ));
+}
+
+/** Since when, under the head: the head itself stays short. */
+export function SheetSync({ offline, settings }: { offline: OfflineScope; settings: ShopSettings }) {
+  return (
+    <div className="flex flex-col gap-3 text-sm text-ink-2">
+      <SinceWhen offline={offline} settings={settings} />
+      {offline.outcome === 'signed-out' ? (
+        <div>
+          <ButtonLink href="/sign-in">{message('wiring.status.sign-in')}</ButtonLink>
+        </div>
+      ) : null}
+      <NotKept offline={offline} />
+    </div>
+  );
 }

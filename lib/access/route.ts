@@ -5,6 +5,7 @@ import { currentSession } from '@/lib/platform/auth';
 import { withShop } from '@/lib/platform/db';
 import { env } from '@/lib/platform/env';
 import { AppError, problemResponse, toAppError } from '@/lib/platform/http/errors';
+import { sha256 } from '@/lib/platform/http/hash';
 import { idempotent } from '@/lib/platform/http/idempotency';
 import { log } from '@/lib/platform/log';
 import { findActor } from './actor';
@@ -71,6 +72,16 @@ export async function answer(name: string, work: () => Promise<Response>): Promi
     if (mapped.code === 'unexpected') log().error({ route: name, error: String(error) }, 'route failed');
     return problemResponse(mapped);
   }
+}
+
+/** A snapshot that the caller has already is not sent again: `tagged` is what tells two of them apart. */
+export function unlessKnown(request: Request, tagged: unknown, answer: () => Response): Response {
+  const tag = `"${sha256(JSON.stringify(tagged))}"`;
+  if (request.headers.get('if-none-match') === tag)
+    return new Response(null, { status: 304, headers: { etag: tag, 'cache-control': 'no-store' } });
+  const response = answer();
+  response.headers.set('etag', tag);
+  return response;
 }
 
 export interface RouteCall<P> {

@@ -3,6 +3,7 @@ import { leftBehind, note } from './journal';
 import { changesBetween, withChanges } from './patch';
 import type { Entity } from './protocol';
 import type { OfflineStore, QueuedEvent } from './store';
+import { notKept } from './trouble';
 
 interface Edit {
   scope: string;
@@ -30,9 +31,12 @@ function editedData(
 /** Applies an edit to the local copy and queues it. Typing on changes the event that still waits. */
 export async function putEntity(store: OfflineStore, edit: Edit): Promise<void> {
   const strike = note(store.name, { edit });
-  await writeEdit(store, edit);
+  await notKept(writeEdit(store, edit));
   strike();
 }
+
+const begunFrom = (stored: Record<string, unknown> | undefined, data: Record<string, unknown>) =>
+  stored ? Object.fromEntries(Object.entries(stored).filter(([key]) => key in data)) : null;
 
 async function writeEdit(store: OfflineStore, edit: Edit): Promise<void> {
   const { scope, collection, id, archived = false } = edit;
@@ -51,15 +55,10 @@ async function writeEdit(store: OfflineStore, edit: Edit): Promise<void> {
     });
     const queued = await store.queue.where({ scope, entityId: id }).sortBy('seq');
     const last = queued.at(-1);
-    // What is on its way or waits for a decision is not touched; a refused one is replaced by the mended edit.
-    if (last?.seq !== undefined && (last.state === 'pending' || last.state === 'refused')) {
-      await store.queue.update(last.seq, {
-        kind,
-        body: data,
-        at: now(),
-        state: 'pending',
-        ...(last.state === 'refused' ? { id: crypto.randomUUID() } : {}),
-      });
+    // What is on its way is not touched; a refused one is replaced by the mended edit; a choice is about what stands now.
+    if (last?.seq !== undefined && last.state !== 'sending') {
+      const mended = last.state === 'refused' ? { id: crypto.randomUUID(), state: 'pending' as const } : {};
+      await store.queue.update(last.seq, { kind, body: data, at: now(), ...mended });
       return;
     }
     await store.queue.add({
@@ -70,6 +69,7 @@ async function writeEdit(store: OfflineStore, edit: Edit): Promise<void> {
       entityId: id,
       body: data,
       baseVersion: null,
+      base: begunFrom(before?.data, data),
       at: now(),
       state: 'pending',
     });
@@ -94,7 +94,7 @@ export async function addHappening(
     state: 'pending',
   };
   const strike = note(store.name, { event });
-  await store.queue.add(event);
+  await notKept(store.queue.add(event));
   strike();
   return id;
 }
@@ -105,28 +105,6 @@ export async function writeLeftBehind(store: OfflineStore): Promise<void> {
     const { edit, event } = noted as { edit?: Edit; event?: QueuedEvent };
     if (edit) await writeEdit(store, edit);
     if (event && (await store.queue.where('id').equals(event.id).count()) === 0) await store.queue.add(event);
-  });
-}
-
-/** The person's choice on a conflict: send mine again on top of theirs. */
-export async function keepMine(store: OfflineStore, event: QueuedEvent): Promise<void> {
-  const { seq, current } = event;
-  if (seq === undefined || !current) return;
-  await store.transaction('rw', store.entities, store.queue, async () => {
-    await store.entities.update([event.scope, event.collection, event.entityId], {
-      version: current.version,
-    });
-    await store.queue.update(seq, { id: crypto.randomUUID(), state: 'pending', baseVersion: null });
-  });
-}
-
-/** The other choice: theirs replaces mine here, and what I typed on top of it is dropped with it. */
-export async function takeTheirs(store: OfflineStore, event: QueuedEvent): Promise<void> {
-  const { current } = event;
-  if (!current) return;
-  await store.transaction('rw', store.entities, store.queue, async () => {
-    await store.queue.where({ scope: event.scope, entityId: event.entityId }).delete();
-    await writeServerEntity(store, event.scope, current);
   });
 }
 
@@ -149,10 +127,20 @@ export async function writeSnapshot(store: OfflineStore, scope: string, entities
     const gone = local.filter((one) => !waiting.has(one.id) && !known.has(`${one.collection}/${one.id}`));
     await store.entities.bulkDelete(gone.map((one) => [one.scope, one.collection, one.id]));
     // A version that others raised meanwhile must not hide a conflict: an edited entity keeps its base.
+    const versions = new Map(local.map((one) => [`${one.collection}/${one.id}`, one.version]));
+    const older = ({ collection, id, version }: Entity) =>
+      version < (versions.get(`${collection}/${id}`) ?? 0);
     await store.entities.bulkPut(
       entities
-        .filter((entity) => !waiting.has(entity.id))
+        .filter((entity) => !waiting.has(entity.id) && !older(entity))
         .map((entity) => ({ ...entity, scope, dirty: 0 as const })),
     );
   });
 }
+
+/** Names the snapshot that lies here, so that the server need not send the same again. */
+export const tagKey = (scope: string) => `tag:${scope}`;
+
+/** The next snapshot comes whole: what lies here is not what came with the last one. */
+export const forgetTag = (store: OfflineStore, scope: string): Promise<void> =>
+  store.meta.delete(tagKey(scope));

@@ -43,24 +43,43 @@ async function livingTabs(): Promise<Set<string>> {
   return new Set([LOCK + TAB, ...(locks?.held ?? []).map((lock) => lock.name ?? '')]);
 }
 
-/** What closed tabs left, in the order in which it was typed; struck out as each is written. */
-export async function leftBehind(store: string, write: (noted: unknown) => Promise<void>): Promise<void> {
-  const kept = storage();
-  if (!kept) return;
+const order = (key: string) => key.split('|').slice(2).join('|');
+
+/** The notes of tabs that are gone, in the order in which they were made. */
+async function leftKeys(kept: Storage, store: string): Promise<string[]> {
   const living = await livingTabs();
-  const order = (key: string) => key.split('|').slice(2).join('|');
-  const keys = Object.keys(kept)
+  return Object.keys(kept)
     .filter((key) => key.startsWith(`${PREFIX}${store}|`) && !living.has(LOCK + (key.split('|')[1] ?? '')))
     .sort((a, b) => order(a).localeCompare(order(b)));
-  for (const key of keys) {
-    const text = kept.getItem(key);
-    if (text !== null) await write(JSON.parse(text));
+}
+
+const read = (text: string): unknown => {
+  try {
+    return JSON.parse(text);
+  } catch {
+    return null;
+  }
+};
+
+/** What closed tabs left; struck out as each is written. One that can't be written now stays for the next tab. */
+export async function leftBehind(store: string, write: (noted: object) => Promise<void>): Promise<void> {
+  const kept = storage();
+  if (!kept) return;
+  for (const key of await leftKeys(kept, store)) {
+    const noted = read(kept.getItem(key) ?? '');
+    if (typeof noted === 'object' && noted !== null) await write(noted);
     kept.removeItem(key);
   }
 }
 
-/** At sign-out, with the stores. */
-export function wipeJournal(): void {
+export async function unwrittenNotes(store: string): Promise<number> {
   const kept = storage();
-  if (kept) for (const key of Object.keys(kept)) if (key.startsWith(PREFIX)) kept.removeItem(key);
+  return kept ? (await leftKeys(kept, store)).length : 0;
+}
+
+/** At sign-out, with the store. */
+export function wipeJournal(store: string): void {
+  const kept = storage();
+  if (kept)
+    for (const key of Object.keys(kept)) if (key.startsWith(`${PREFIX}${store}|`)) kept.removeItem(key);
 }

@@ -5,7 +5,7 @@
 type Data = Record<string, unknown>;
 
 /** Marks a key that the edit took out. */
-const GONE = Symbol('gone');
+export const GONE = Symbol('gone');
 
 const isPlain = (value: unknown): value is Data =>
   typeof value === 'object' && value !== null && !Array.isArray(value);

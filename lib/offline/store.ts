@@ -3,7 +3,7 @@
  * that nobody finds somebody else's work on a shared phone.
  */
 import Dexie, { type Table } from 'dexie';
-import { wipeJournal } from './journal';
+import { unwrittenNotes, wipeJournal } from './journal';
 import type { QueuedPhoto } from './photos';
 import type { Entity } from './protocol';
 
@@ -30,6 +30,9 @@ export interface QueuedEvent {
   state: EventState;
   message?: string;
   issues?: { path: string; message: string }[];
+  /** What stood here when the edit was begun: by it, mine is told from theirs. Null for a new entry. */
+  base?: Record<string, unknown> | null;
+  /** What stands on the server instead, on a conflict. */
   current?: Entity;
 }
 
@@ -62,19 +65,40 @@ export function offlineStore(shopId: string, personId: string): OfflineStore {
   return store;
 }
 
+/** The shop's and the person's store, as named on the device. */
+const storeNames = async (): Promise<string[]> =>
+  (await Dexie.getDatabaseNames()).filter((name) => name.startsWith(STORE_PREFIX));
+
+async function unsentIn(name: string): Promise<number> {
+  const store = await new Dexie(name).open();
+  const kept = store.tables.filter(({ name: table }) => table === 'queue' || table === 'photos');
+  const counts = await Promise.all(kept.map((table) => table.count()));
+  store.close();
+  return counts.reduce((sum, own) => sum + own, 0) + (await unwrittenNotes(name));
+}
+
+/** Whether anything on this device, of anybody, has not been sent. */
+export async function hasUnsent(): Promise<boolean> {
+  for (const name of await storeNames()) if ((await unsentIn(name)) > 0) return true;
+  return false;
+}
+
+/** From now on nothing reads or writes them in this tab, not even an answer that is still on its way. */
+export function closeStores(): void {
+  for (const store of open.values()) store.close({ disableAutoOpen: true });
+  open.clear();
+}
+
 /** At sign-out: nothing of this person stays on the device. Says false where unsent work was kept instead. */
 export async function wipeOffline(force = false): Promise<boolean> {
-  const names = (await Dexie.getDatabaseNames()).filter((name) => name.startsWith(STORE_PREFIX));
   let clean = true;
-  for (const name of names) {
-    const store = await new Dexie(name).open();
-    const kept = store.tables.filter(({ name: table }) => table === 'queue' || table === 'photos');
-    const unsent = (await Promise.all(kept.map((table) => table.count()))).reduce((sum, own) => sum + own, 0);
-    store.close();
-    if (unsent > 0 && !force) clean = false;
-    else await Dexie.delete(name);
+  for (const name of await storeNames()) {
+    if (!force && (await unsentIn(name)) > 0) {
+      clean = false;
+      continue;
+    }
+    await Dexie.delete(name);
+    wipeJournal(name);
   }
-  if (clean) wipeJournal();
-  open.clear();
   return clean;
 }

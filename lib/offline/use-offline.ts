@@ -1,11 +1,14 @@
 'use client';
 /** React's side of the store: live entities, edits, and what the status line says. */
 import { useLiveQuery } from 'dexie-react-hooks';
-import { useCallback, useEffect, useMemo, useRef, useState } from 'react';
-import { writeLeftBehind, writeSnapshot } from './edits';
-import type { Entity } from './protocol';
-import { type OfflineStore, offlineStore, type QueuedEvent, type StoredEntity } from './store';
-import { sendAll, type SyncOutcome } from './sync';
+import { useCallback, useEffect, useMemo, useRef, useState, useSyncExternalStore } from 'react';
+import { writeLeftBehind } from './edits';
+import { exchange, extraKey, syncedKey } from './keep';
+import { SyncLoop } from './loop';
+import { onSignedOut } from './person';
+import { closeStores, type OfflineStore, offlineStore, type QueuedEvent, type StoredEntity } from './store';
+import type { SyncOutcome } from './sync';
+import { isTroubled, onTrouble } from './trouble';
 
 export interface OfflineScope {
   store: OfflineStore;
@@ -14,13 +17,46 @@ export interface OfflineScope {
   entities: StoredEntity[] | undefined;
   queue: QueuedEvent[];
   outcome: SyncOutcome | 'starting';
+  /** When device and server last had the same; null before the first time. */
+  syncedAt: string | null;
+  /** The device did not keep the last edit. */
+  troubled: boolean;
   /** Further data of the snapshot (settings, parts), as last synchronised. */
   extra: unknown;
   nudge: () => void;
 }
 
-const RETRY_MS = 5_000;
-const SEND_AFTER_MS = 700;
+/** Keeps the loop going while a screen is open, and hurries it when there is reason to. */
+function useLoop(store: OfflineStore, run: (pull: boolean) => Promise<SyncOutcome>) {
+  const [outcome, setOutcome] = useState<SyncOutcome | 'starting'>('starting');
+  const loop = useRef<SyncLoop | null>(null);
+  useEffect(() => {
+    const own = new SyncLoop(run, setOutcome);
+    loop.current = own;
+    const hurry = () => {
+      if (!document.hidden) own.hurry();
+    };
+    const begin = () => own.hurry();
+    void writeLeftBehind(store).then(begin, begin);
+    const away = onSignedOut(() => {
+      own.stop();
+      closeStores();
+      location.reload();
+    });
+    window.addEventListener('online', hurry);
+    window.addEventListener('focus', hurry);
+    document.addEventListener('visibilitychange', hurry);
+    return () => {
+      own.stop();
+      away();
+      window.removeEventListener('online', hurry);
+      window.removeEventListener('focus', hurry);
+      document.removeEventListener('visibilitychange', hurry);
+    };
+  }, [store, run]);
+  const nudge = useCallback(() => loop.current?.nudge(), []);
+  return { outcome, nudge };
+}
 
 /** Keeps one scope (a job's survey, a wiring sheet) in step with the server while its screen is open. */
 export function useOffline(options: {
@@ -32,48 +68,17 @@ export function useOffline(options: {
 }): OfflineScope {
   const { shopId, personId, scope, snapshotUrl, eventsUrl } = options;
   const store = useMemo(() => offlineStore(shopId, personId), [shopId, personId]);
-  const [outcome, setOutcome] = useState<SyncOutcome | 'starting'>('starting');
-  const busy = useRef(false);
   const entities = useLiveQuery(() => store.entities.where({ scope }).toArray(), [store, scope]);
   const queue = useLiveQuery(() => store.queue.where({ scope }).sortBy('seq'), [store, scope]);
-  const extra = useLiveQuery(async () => (await store.meta.get(`extra:${scope}`))?.value, [store, scope]);
-
-  const pull = useCallback(async () => {
-    const response = await fetch(snapshotUrl).catch(() => null);
-    if (!response?.ok) return;
-    const { entities: fresh, ...rest } = (await response.json()) as { entities: Entity[] };
-    await writeSnapshot(store, scope, fresh);
-    await store.meta.put({ key: `extra:${scope}`, value: rest });
-  }, [store, scope, snapshotUrl]);
-
-  const sync = useCallback(async () => {
-    if (busy.current) return;
-    busy.current = true;
-    try {
-      setOutcome(await sendAll(store, scope, eventsUrl));
-    } finally {
-      busy.current = false;
-    }
-  }, [store, scope, eventsUrl]);
-
-  useEffect(() => {
-    void writeLeftBehind(store).then(sync).then(pull);
-    const again = () => void sync().then(pull);
-    const timer = setInterval(() => void sync(), RETRY_MS);
-    window.addEventListener('online', again);
-    window.addEventListener('focus', again);
-    return () => {
-      clearInterval(timer);
-      window.removeEventListener('online', again);
-      window.removeEventListener('focus', again);
-    };
-  }, [store, sync, pull]);
-
-  const timer = useRef<ReturnType<typeof setTimeout> | null>(null);
-  const nudge = useCallback(() => {
-    if (timer.current) clearTimeout(timer.current);
-    timer.current = setTimeout(() => void sync(), SEND_AFTER_MS);
-  }, [sync]);
-
-  return { store, scope, entities, queue: queue ?? [], outcome, extra, nudge };
+  const extra = useLiveQuery(async () => (await store.meta.get(extraKey(scope)))?.value, [store, scope]);
+  const synced = useLiveQuery(async () => (await store.meta.get(syncedKey(scope)))?.value, [store, scope]);
+  const troubled = useSyncExternalStore(onTrouble, isTroubled, () => false);
+  // A screen that nobody looks at sends what it has and asks for nothing.
+  const run = useCallback(
+    (pull: boolean) => exchange(store, scope, { snapshotUrl, eventsUrl }, { pull: pull && !document.hidden }),
+    [store, scope, snapshotUrl, eventsUrl],
+  );
+  const { outcome, nudge } = useLoop(store, run);
+  const syncedAt = typeof synced === 'string' ? synced : null;
+  return { store, scope, entities, queue: queue ?? [], outcome, syncedAt, troubled, extra, nudge };
 }

@@ -1,6 +1,5 @@
 /** The survey with the server really stopped: reloaded, closed and opened again, sent once it is back; a second phone. */
-import { type Browser, type BrowserContext, expect, type Page, test } from '@playwright/test';
-import type { Role } from '@/lib/access/policy';
+import { expect, type Page, test } from '@playwright/test';
 import { select, withShop } from '@/lib/platform/db';
 import { loadSurvey } from '@/lib/surveys/queries';
 import { addParts, bakery } from '@/seeders/demo';
@@ -8,7 +7,7 @@ import { releasedSheet } from '../support/released-sheet';
 import { makeShop, type TestShop } from '../support/shop';
 import { look } from './support/look';
 import { OwnServer } from './support/own-server';
-import { sessionCookie } from './support/signed-in';
+import { lookAgain, newArea, phone, ready } from './support/phone';
 
 let shop: TestShop;
 let job = '';
@@ -23,44 +22,18 @@ test.beforeAll(async () => {
 });
 test.afterAll(async () => server.stop());
 
-async function phone(browser: Browser, role: Role): Promise<BrowserContext> {
-  const context = await browser.newContext({
-    viewport: { width: 360, height: 780 },
-    hasTouch: true,
-    baseURL: server.url,
-  });
-  const value = await sessionCookie(shop.actors[role].personId);
-  await context.addCookies([{ name: 'next-auth.session-token', value, url: server.url, httpOnly: true }]);
-  return context;
-}
-
 const survey = () => `/s/${shop.shopId}/jobs/${job}/survey`;
 const events = () =>
   withShop(shop.shopId, () =>
-    select<{ kind: string }>('select kind from client_events where job_id = $1', [job]),
+    select<{ entity: string }>(
+      'select entity_id as entity from client_events where job_id = $1 order by received_at',
+      [job],
+    ),
   );
-
-/** The worker has kept what it needs and answers for this page. */
-async function ready(page: Page): Promise<void> {
-  await page.evaluate(async () => {
-    await navigator.serviceWorker.ready;
-    if (!navigator.serviceWorker.controller)
-      await new Promise((resolve) =>
-        navigator.serviceWorker.addEventListener('controllerchange', resolve, { once: true }),
-      );
-  });
-}
-
-async function newArea(page: Page, name: string, width: string): Promise<void> {
-  await page.getByRole('button', { name: 'Add an area' }).click();
-  await page.getByLabel('Name', { exact: true }).first().fill(name);
-  await page.getByLabel('Width', { exact: true }).fill(width);
-  await page.getByRole('button', { name: /^Fold up/ }).click();
-}
 
 test('a survey goes on with the server stopped, and is sent once', async ({ browser }) => {
   test.setTimeout(120_000);
-  const context = await phone(browser, 'estimator');
+  const context = await phone(browser, shop, 'estimator', server);
   let page = await context.newPage();
   await page.goto(survey());
   await expect(page.getByRole('heading', { name: 'Back room' })).toBeVisible();
@@ -70,6 +43,7 @@ test('a survey goes on with the server stopped, and is sent once', async ({ brow
   await server.stop();
   await newArea(page, 'Cold store', '12');
   await expect(page.getByText(/^No signal\. Kept on this device/)).toBeVisible({ timeout: 15_000 });
+  await expect(page.getByText(/^The oldest unsent change is from .* Last synchronised /)).toBeVisible();
 
   await page.reload();
   await expect(page.getByText('Working from this device')).toBeVisible();
@@ -79,8 +53,14 @@ test('a survey goes on with the server stopped, and is sent once', async ({ brow
   await expect(page.getByText(/^No signal\. Kept on this device, 2 changes to send/)).toBeVisible();
   await look(page, 'survey-no-signal');
 
-  // A photo that is taken now is kept whole, and shown.
+  // Counts and a cove, and a photo that is kept whole, and shown.
   await page.getByRole('button', { name: 'Open Loading bay' }).click();
+  await page.getByRole('button', { name: /^Add \+ 4-lamp F32T8/ }).click();
+  await page.getByRole('button', { name: /^Count again/ }).click();
+  for (let tap = 0; tap < 5; tap++) await page.getByRole('button', { name: 'One more', exact: true }).click();
+  await page.getByRole('button', { name: 'That is all of them' }).click();
+  await page.getByRole('button', { name: 'Add a cove' }).click();
+  await page.getByLabel('Tape length', { exact: true }).last().fill('12');
   await page.getByLabel('Add a photo').last().setInputFiles('tests/e2e/pictures/customer.png');
   await expect(page.getByRole('img', { name: 'Photo of Loading bay, not sent yet' })).toBeVisible();
   await expect(page.getByText(/1 photo to send\./)).toBeVisible();
@@ -109,38 +89,62 @@ test('a survey goes on with the server stopped, and is sent once', async ({ brow
   expect(areas.filter(({ data }) => data['name'] === 'Loading bay')).toMatchObject([
     { data: { notes: 'Door is stuck, ask for the' } },
   ]);
-  // Each event was applied once: every one raised its area's version by one.
-  const made = areas.filter(({ data }) => ['Cold store', 'Loading bay'].includes(String(data['name'])));
+  const bay = areas.find(({ data }) => data['name'] === 'Loading bay')?.id;
+  const inBay = entities.filter(({ data }) => data['areaId'] === bay);
+  expect(inBay.filter(({ collection }) => collection === 'luminaires')).toMatchObject([
+    { data: { quantity: 5, countConfidence: 'counted' } },
+  ]);
+  expect(inBay.filter(({ collection }) => collection === 'coves')).toHaveLength(1);
+  // Each event was applied once: every one raised its entry's version by one, and all were typed with no server.
+  const made = entities.filter(
+    ({ id, data }) => id === bay || data['areaId'] === bay || data['name'] === 'Cold store',
+  );
   expect((await events()).length - before).toBe(made.reduce((sum, { version }) => sum + version, 0));
+  // In the order in which they were begun: what lies in an area comes after it.
+  const begun = [...new Set((await events()).slice(before).map(({ entity }) => entity))];
+  const collectionOf = (id: string) => made.find((one) => one.id === id)?.collection;
+  expect(begun.map(collectionOf)).toEqual(['areas', 'areas', 'luminaires', 'coves']);
   const photos = () =>
     withShop(shop.shopId, () =>
       select<{ subject: string }>('select subject_id as subject from photos where job_id = $1', [job]),
     );
   await expect.poll(async () => (await photos()).length, { timeout: 20_000 }).toBe(1);
-  expect(await photos()).toEqual([{ subject: made.find(({ data }) => data['name'] === 'Loading bay')?.id }]);
+  expect(await photos()).toEqual([{ subject: bay }]);
   await expect(page.getByText(/photo to send/)).toBeHidden();
   await context.close();
 });
 
 test('two people on one survey: both see all, and choose where both changed one', async ({ browser }) => {
   test.setTimeout(120_000);
-  const [a, b] = [await phone(browser, 'estimator'), await phone(browser, 'owner')];
+  const [a, b] = [
+    await phone(browser, shop, 'estimator', server),
+    await phone(browser, shop, 'owner', server),
+  ];
   const [mine, theirs] = [await a.newPage(), await b.newPage()];
   await mine.goto(survey());
   await theirs.goto(survey());
   await expect(theirs.getByRole('heading', { name: 'Loading bay' })).toBeVisible();
   await ready(mine);
 
-  const change = async (page: Page, area: string, use: string) => {
+  // What one adds the other sees without opening the page again.
+  await newArea(theirs, 'Boiler room', '8');
+  await expect(theirs.getByText('All saved.')).toBeVisible({ timeout: 15_000 });
+  await lookAgain(mine);
+  await expect(mine.getByRole('heading', { name: 'Boiler room' })).toBeVisible();
+
+  const change = async (page: Page, area: string, use: string, width?: string) => {
     await page.getByRole('button', { name: `Open ${area}` }).click();
-    await page.getByLabel('Used for').fill(use);
+    if (use) await page.getByLabel('Used for').fill(use);
+    if (width) await page.getByLabel('Width', { exact: true }).fill(width);
     await page.getByRole('button', { name: /^Fold up/ }).click();
   };
   await a.setOffline(true);
   await change(mine, 'Loading bay', 'Unloading');
   await change(mine, 'Cold store', 'Fish');
-  await change(theirs, 'Loading bay', 'Parking');
+  await change(mine, 'Boiler room', 'Heating');
+  await change(theirs, 'Loading bay', 'Parking', '30');
   await change(theirs, 'Cold store', 'Meat');
+  await change(theirs, 'Boiler room', '', '9');
   await expect(theirs.getByText('All saved.')).toBeVisible({ timeout: 15_000 });
 
   await a.setOffline(false);
@@ -160,6 +164,15 @@ test('two people on one survey: both see all, and choose where both changed one'
   const { entities } = await loadSurvey(shop.shopId, job);
   const use = (name: string) => entities.find(({ data }) => data['name'] === name)?.data['use'];
   expect([use('Loading bay'), use('Cold store')]).toEqual(['Unloading', 'Meat']);
+  // What only one of the two changed stands, whatever was chosen; where they changed different fields nothing was asked.
+  const width = (name: string) =>
+    Number(entities.find(({ data }) => data['name'] === name)?.data['widthMetres']);
+  expect(width('Loading bay')).toBeCloseTo(30 * 0.3048, 6);
+  expect([use('Boiler room'), width('Boiler room').toFixed(4)]).toEqual(['Heating', (9 * 0.3048).toFixed(4)]);
+  // And the other phone has the same.
+  await lookAgain(theirs);
+  await theirs.getByRole('button', { name: 'Open Loading bay' }).click();
+  await expect(theirs.getByLabel('Used for')).toHaveValue('Unloading');
   await a.close();
   await b.close();
 });
@@ -167,7 +180,7 @@ test('two people on one survey: both see all, and choose where both changed one'
 test('a wiring sheet opens with the server stopped, and is worked on', async ({ browser }) => {
   test.setTimeout(120_000);
   const { sheetId } = await releasedSheet(shop, job);
-  const context = await phone(browser, 'owner');
+  const context = await phone(browser, shop, 'owner', server);
   let page = await context.newPage();
   const address = `/s/${shop.shopId}/sheets/${sheetId}`;
   await page.goto(address);
@@ -195,34 +208,4 @@ test('a wiring sheet opens with the server stopped, and is worked on', async ({ 
   await page.goto(address);
   await expect.poll(async () => (await sent()).length, { timeout: 20_000 }).toBe(3);
   await context.close();
-});
-
-test('nothing of a person stays after sign-out', async ({ browser }) => {
-  test.setTimeout(120_000);
-  const context = await phone(browser, 'estimator');
-  const page = await context.newPage();
-  await page.goto(survey());
-  await expect(page.getByRole('heading', { name: 'Back room' })).toBeVisible();
-  await ready(page);
-  await page.getByText('estimator', { exact: false }).first().click();
-  await page.getByRole('button', { name: 'Sign out' }).click();
-  await expect(page).toHaveURL(/sign-in/);
-  const kept = await page.evaluate(async () => ({
-    stores: (await indexedDB.databases())
-      .map(({ name }) => name)
-      .filter((name) => name?.startsWith('lampwright-')),
-    persons: Object.keys(localStorage).filter((key) => key.startsWith('lampwright-')),
-    pages: (await Promise.all((await caches.keys()).map(async (name) => (await caches.open(name)).keys())))
-      .flat()
-      .map(({ url }) => new URL(url).pathname)
-      .filter((path) => !path.startsWith('/_next/static/')),
-  }));
-  expect(kept).toEqual({ stores: [], persons: [], pages: ['/offline'] });
-
-  await server.stop();
-  await page.goto(survey());
-  await expect(page.getByText('Nobody has worked in this shop on this device')).toBeVisible();
-  await expect(page.getByText('Back room')).toBeHidden();
-  await context.close();
-  await server.start();
 });

@@ -1,14 +1,8 @@
 /** The queue on the device: nothing is lost, nothing is sent twice, conflicts wait for a person. */
 import 'fake-indexeddb/auto';
 import { beforeEach, describe, expect, it, vi } from 'vitest';
-import {
-  addHappening,
-  keepMine,
-  putEntity,
-  takeTheirs,
-  writeLeftBehind,
-  writeSnapshot,
-} from '@/lib/offline/edits';
+import { keepMine, takeTheirs } from '@/lib/offline/decide';
+import { addHappening, putEntity, writeLeftBehind, writeSnapshot } from '@/lib/offline/edits';
 import type { ClientEvent, Entity, EventAnswer } from '@/lib/offline/protocol';
 import { OfflineStore, wipeOffline } from '@/lib/offline/store';
 import { sendAll, sendBatch } from '@/lib/offline/sync';
