@@ -115,10 +115,10 @@ export const readingRows: FindingRow[] = [
   fit.caution(
     'fit-ill-conditioned',
     /condition index over 30/,
-    { points: bunched(0.009) },
-    { points: bunched(0.003) },
+    { points: bunched(0.00749) },
+    { points: bunched(0.00748) },
   ),
-  fit.caution('fit-residual-large', /common practice/, { points: off(0.3) }, { points: off(0.01) }),
+  fit.caution('fit-residual-large', /common practice/, { points: off(0.093) }, { points: off(0.0929) }),
   fit.note(
     'fit-working-amps-not-given',
     /common practice/,
