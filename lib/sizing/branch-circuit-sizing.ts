@@ -94,6 +94,24 @@ export interface Settled {
 }
 
 /**
+ * One kind of load, too much for its circuits' run: shared out anew over all of them, since cutting each circuit by
+ * itself can take more than there need be. null where nothing is to be shared.
+ */
+function sharedAnew({ limits }: BranchCase, s: Sizer, bins: readonly Bin[]): Settled | null {
+  const [only, other] = limits;
+  // The first of even shares is the largest.
+  const [largest] = bins;
+  if (!only || other || !largest) return null;
+  const one = s.size(largest);
+  if (fits(one) || !splittable(one)) return null;
+  const shares = evenShares(only.load.quantity, largestThatFits(s, largest));
+  return {
+    circuits: shares.map((units) => s.size([units])),
+    splitBy: one.sized.choice.failed[0] ?? null,
+  };
+}
+
+/**
  * Every circuit with a conductor, split where no conductor serves it and fewer units help. Where not even one unit
  * can be served, circuits stay as they are, without a size.
  */
@@ -101,6 +119,8 @@ export function settle(c: BranchCase, bins: readonly Bin[]): Settled {
   const s = sizer(c);
   const single = (at: number) => s.size(c.limits.map((_, place) => (place === at ? 1 : 0)));
   const servable = c.limits.every((_, at) => fits(single(at)));
+  const anew = servable ? sharedAnew(c, s, bins) : null;
+  if (anew) return anew;
   let splitBy: GovernedBy | null = null;
   const settled = (bin: Bin): SizedBin[] => {
     const one = s.size(bin);

@@ -121,6 +121,24 @@ describe('branch-circuit', () => {
     );
   });
 
+  it('numbered case 1: shares one kind anew over all circuits, where cutting each in two took one too many', () => {
+    const row = (quantity: number) =>
+      branchCircuit({
+        basis: 'us',
+        system: 'single-phase',
+        volts: 120,
+        breakerAmps: 32,
+        continuous: true,
+        metres: 135.9627149034856,
+        spacingMetres: 3.02e-13,
+        maxDropPct: 1,
+        loads: [{ name: 'a', quantity, voltAmps: 69.81818188800001 }],
+      }).result.circuits;
+    expect(row(77).length).toBeLessThanOrEqual(row(87).length);
+    expect(row(77).reduce((sum, { units }) => sum + (units[0]?.quantity ?? 0), 0)).toBe(77);
+    for (const { size } of row(77)) expect(size).not.toBeNull();
+  });
+
   it('never needs fewer circuits for more units, a smaller breaker count or a longer run', () => {
     fc.assert(
       fc.property(input, (several) => {
