@@ -17,9 +17,20 @@ export const nameOf = (data: Record<string, unknown>): string =>
   text(data['description']) ??
   'this entry';
 
+/** Where the field's name would not tell. */
+const LABELS: Record<string, string> = {
+  use: 'used for',
+  weeklyHours: 'hours a week',
+  quantity: 'count',
+  watts: 'input watts each',
+  luminaireType: 'type',
+};
+
 /** `details.ceilingHeightMetres` as "ceiling height": the fields' own labels stand on the screen below. */
 export function fieldWords(path: string): string {
   const key = path.split('.').at(-1) ?? path;
+  const known = LABELS[key];
+  if (known) return known;
   const words = key
     .replace(/(Metres|Celsius|Id)$/, '')
     .replace(/([A-Z])/g, ' $1')

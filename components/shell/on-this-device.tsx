@@ -1,6 +1,6 @@
 'use client';
 import { useEffect } from 'react';
-import { forgetPersons, isLeaving, rememberPerson } from '@/lib/offline/person';
+import { forgetPersons, isLeaving, onSignedOut, rememberPerson } from '@/lib/offline/person';
 import { leaveDevice } from './leave-device';
 
 /** Makes the device ready for no signal: the service worker, and whose store to open. */
@@ -12,10 +12,11 @@ export function OnThisDevice({ shopId, membershipId }: { shopId: string; members
       return;
     }
     rememberPerson(shopId, membershipId);
-    if (!('serviceWorker' in navigator)) return;
     // Refused in private windows, without https and while developing: all works there with a signal alone.
-    void navigator.serviceWorker.register('/sw.js').catch(() => undefined);
+    if ('serviceWorker' in navigator) void navigator.serviceWorker.register('/sw.js').catch(() => undefined);
   }, [shopId, membershipId]);
+  // Signed out in another tab: what this one shows goes too.
+  useEffect(() => onSignedOut(() => window.location.reload()), []);
   return null;
 }
 

@@ -3,6 +3,7 @@
 import { Choices } from '@/components/offline/choices';
 import { NotKept, SinceWhen } from '@/components/offline/since-when';
 import { ButtonLink } from '@/components/ui/button';
+import { Notice } from '@/components/ui/sheet';
 import type { OfflineScope } from '@/lib/offline/use-offline';
 import { DEFAULT_SETTINGS, type ShopSettings } from '@/lib/units/settings';
 
@@ -45,6 +46,11 @@ export function SyncStatus({ offline, photos = 0 }: { offline: OfflineScope; pho
         <div>
           <ButtonLink href="/sign-in">Sign in again</ButtonLink>
         </div>
+      ) : null}
+      {offline.outcome === 'offline' && !offline.extra ? (
+        <Notice kind="caution" title="This job was never opened on this device with a signal." role="status">
+          <p>What was surveyed before is not shown here. What you add is kept, and sent.</p>
+        </Notice>
       ) : null}
       <NotKept offline={offline} />
       <Choices offline={offline} settings={settings} />

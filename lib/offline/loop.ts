@@ -15,7 +15,9 @@ export function pauseAfter(failures: number, chance: number): number {
 export class SyncLoop {
   private timer: ReturnType<typeof setTimeout> | null = null;
   private running = false;
-  private again = false;
+  /** What came up while an exchange was on its way. */
+  private again: 'send' | 'pull' | null = null;
+  private pulledAt = -Infinity;
   private stopped = false;
   private failures = 0;
   private last: SyncOutcome | null = null;
@@ -33,7 +35,8 @@ export class SyncLoop {
 
   /** Something was typed. A server in trouble is not asked more often for it. */
   nudge(): void {
-    if (this.last !== 'failed') this.plan(AFTER_EDIT_MS, false);
+    if (this.running) this.again ??= 'send';
+    else if (this.last !== 'failed') this.plan(AFTER_EDIT_MS, false);
   }
 
   stop(): void {
@@ -46,23 +49,26 @@ export class SyncLoop {
     if (!this.stopped) this.timer = setTimeout(() => void this.turn(pull), pause);
   }
 
-  private async turn(pull: boolean): Promise<void> {
+  private async turn(asked: boolean): Promise<void> {
     if (this.stopped) return;
     if (this.running) {
-      this.again = true;
+      if (asked) this.again = 'pull';
       return;
     }
     this.running = true;
+    // Who types without a pause hears of the others all the same.
+    const pull = asked || Date.now() - this.pulledAt >= STEADY_MS;
+    if (pull) this.pulledAt = Date.now();
     const outcome = await this.outcome(pull);
     this.running = false;
     if (this.stopped) return;
     this.last = outcome;
     this.failures = outcome === 'nothing' ? 0 : this.failures + 1;
     this.told(outcome);
-    if (this.again) {
-      this.again = false;
-      this.plan(AFTER_EDIT_MS, true);
-    } else this.plan(pauseAfter(this.failures, Math.random()), true);
+    const { again } = this;
+    this.again = null;
+    if (again && outcome !== 'failed') this.plan(AFTER_EDIT_MS, again === 'pull');
+    else this.plan(pauseAfter(this.failures, Math.random()), true);
   }
 
   /** A store that was closed under it (sign-out in another tab) ends the page, not the loop. */

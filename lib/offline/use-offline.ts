@@ -38,6 +38,8 @@ function useLoop(store: OfflineStore, run: (pull: boolean) => Promise<SyncOutcom
     };
     const begin = () => own.hurry();
     void writeLeftBehind(store).then(begin, begin);
+    // Asked for, a browser that runs short of room clears other sites first.
+    void navigator.storage?.persist?.().catch(() => false);
     const away = onSignedOut(() => {
       own.stop();
       closeStores();

@@ -9,12 +9,15 @@ import { newArea, phone, ready, signInOn } from './support/phone';
 
 let shop: TestShop;
 let job = '';
+let neverOpened = '';
 let server: OwnServer;
 
 test.describe.configure({ mode: 'serial' });
 test.beforeAll(async () => {
   shop = await makeShop();
-  job = await bakery(shop.actors.owner, await addParts(shop.actors.owner));
+  const parts = await addParts(shop.actors.owner);
+  job = await bakery(shop.actors.owner, parts);
+  neverOpened = await bakery(shop.actors.owner, parts);
   server = await OwnServer.make();
   await server.start();
 });
@@ -172,5 +175,27 @@ test('signing out with the server stopped: the device shows nothing, other tabs 
   await expect(page).toHaveURL(/sign-in/, { timeout: 20_000 });
   await page.goto(survey());
   await expect(page).toHaveURL(/sign-in/);
+  await context.close();
+});
+
+test('a job that was never opened here says so with no signal; what is added is kept and sent', async ({
+  browser,
+}) => {
+  test.setTimeout(120_000);
+  const context = await phone(browser, shop, 'estimator', server);
+  const page = await context.newPage();
+  await page.goto(survey());
+  await saved(page);
+  await ready(page);
+  await server.stop();
+  await page.goto(`/s/${shop.shopId}/jobs/${neverOpened}/survey`);
+  await expect(page.getByText('This job was never opened on this device with a signal.')).toBeVisible();
+  await newArea(page, 'Annex', '4');
+  await look(page, 'survey-never-opened');
+  await server.start();
+  // Nobody touches the phone: it goes on asking, and hears of the rest.
+  await expect(page.getByRole('heading', { name: 'Back room' })).toBeVisible({ timeout: 60_000 });
+  await expect(page.getByRole('heading', { name: 'Annex' })).toBeVisible();
+  await saved(page);
   await context.close();
 });

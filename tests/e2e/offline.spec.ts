@@ -132,6 +132,12 @@ test('two people on one survey: both see all, and choose where both changed one'
   await lookAgain(mine);
   await expect(mine.getByRole('heading', { name: 'Boiler room' })).toBeVisible();
 
+  // A screen that asks again is not sent the same survey twice.
+  const address = `/api/v1/shops/${shop.shopId}/jobs/${job}/survey`;
+  const tag = (await a.request.get(address)).headers()['etag'] ?? '';
+  const again = () => a.request.get(address, { headers: { 'if-none-match': tag } });
+  expect((await again()).status()).toBe(304);
+
   const change = async (page: Page, area: string, use: string, width?: string) => {
     await page.getByRole('button', { name: `Open ${area}` }).click();
     if (use) await page.getByLabel('Used for').fill(use);
@@ -148,6 +154,7 @@ test('two people on one survey: both see all, and choose where both changed one'
   await expect(theirs.getByText('All saved.')).toBeVisible({ timeout: 15_000 });
 
   await a.setOffline(false);
+  expect((await again()).status()).toBe(200);
   const clash = (name: string) =>
     mine.getByRole('status').filter({ hasText: `Somebody else changed ${name} too.` });
   await expect(clash('Loading bay')).toBeVisible({ timeout: 20_000 });

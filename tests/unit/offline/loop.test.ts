@@ -58,6 +58,35 @@ describe('the loop', () => {
     ]);
   });
 
+  it('what is typed while an exchange is on its way is sent right after it', async () => {
+    const ends: ((outcome: SyncOutcome) => void)[] = [];
+    const loop = new SyncLoop(
+      () => new Promise((resolve) => ends.push(resolve)),
+      () => undefined,
+    );
+    loop.hurry();
+    await vi.advanceTimersByTimeAsync(1_000);
+    loop.nudge();
+    await vi.advanceTimersByTimeAsync(2_000);
+    expect(ends).toHaveLength(1);
+    ends[0]?.('nothing');
+    await vi.advanceTimersByTimeAsync(1_000);
+    loop.stop();
+    expect(ends).toHaveLength(2);
+  });
+
+  it('who types without a pause hears of the others all the same, twice a minute', async () => {
+    const { loop, runs } = make([]);
+    loop.hurry();
+    for (let second = 0; second < 65; second++) {
+      loop.nudge();
+      await vi.advanceTimersByTimeAsync(1_000);
+    }
+    loop.stop();
+    expect(runs.filter(({ pull }) => pull)).toHaveLength(3);
+    expect(runs.length).toBeGreaterThan(50);
+  });
+
   it('does not press a server in trouble for every key, but does where only the signal was gone', async () => {
     vi.spyOn(Math, 'random').mockReturnValue(0.5);
     const troubled = make(['failed']);
