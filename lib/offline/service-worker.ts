@@ -13,6 +13,7 @@ interface FetchLike extends Extendable {
 export interface WorkerScope {
   location: { origin: string };
   clients: { claim: () => Promise<void> };
+  skipWaiting: () => Promise<void>;
   addEventListener(type: 'install' | 'activate', listener: (event: Extendable) => void): void;
   addEventListener(type: 'fetch', listener: (event: FetchLike) => void): void;
 }
@@ -54,16 +55,20 @@ export function serviceWorker(scope: WorkerScope, build: string): void {
     ),
   ];
 
+  const fontsIn = (css: string, address: string): string[] =>
+    [...css.matchAll(/url\(["']?([^"')]+)["']?\)/g)]
+      .map((match) => new URL(match[1] ?? '', new URL(address, scope.location.origin)).pathname)
+      .filter((path) => path.startsWith(STATIC));
+
+  /** With what it loads in its turn: a style's fonts, a script's pieces that are fetched when they are needed. */
   async function keep(cache: Cache, address: string): Promise<void> {
+    if (await cache.match(address)) return;
     const response = await fetch(address);
     if (!response.ok) throw new Error(`${address} answered ${response.status}`);
-    const copy = response.clone();
-    await cache.put(address, response);
-    if (!address.endsWith('.css')) return;
-    const fonts = [...(await copy.text()).matchAll(/url\(["']?([^"')]+)["']?\)/g)]
-      .map((match) => new URL(match[1] ?? '', new URL(address, scope.location.origin)))
-      .filter((font) => font.pathname.startsWith(STATIC));
-    for (const font of fonts) if (!(await cache.match(font.pathname))) await keep(cache, font.pathname);
+    await cache.put(address, response.clone());
+    const text = /\.(css|js)$/.test(address) ? await response.text() : '';
+    const loads = address.endsWith('.css') ? fontsIn(text, address) : scriptsAndStyles(text);
+    for (const one of loads) await keep(cache, one);
   }
 
   async function install(): Promise<void> {
@@ -78,12 +83,20 @@ export function serviceWorker(scope: WorkerScope, build: string): void {
       'x-content-type-options': 'nosniff',
     };
     await cache.put(SHELL, new Response(html, { headers }));
+    await scope.skipWaiting();
   }
 
-  /** The older worker's files went with its last tab: a new worker waits until then. */
+  const madeAt = (name: string) => Number.parseInt(name.slice(PREFIX.length), 36) || 0;
+
+  /**
+   * A phone's tab may stay open for months: a new worker does not wait for it, or the page without a signal would be as
+   * old as the tab. The build before is kept for tabs that still run it; older ones ask the server.
+   */
   async function activate(): Promise<void> {
-    for (const name of await caches.keys())
-      if (name.startsWith(PREFIX) && name !== CACHE) await caches.delete(name);
+    const others = (await caches.keys())
+      .filter((name) => name.startsWith(PREFIX) && name !== CACHE)
+      .sort((a, b) => madeAt(b) - madeAt(a));
+    for (const name of others.slice(1)) await caches.delete(name);
     await scope.clients.claim();
   }
 
@@ -100,7 +113,7 @@ export function serviceWorker(scope: WorkerScope, build: string): void {
     new Promise<null>((resolve) => setTimeout(() => resolve(null), milliseconds));
 
   async function page(request: Request, path: string): Promise<Response> {
-    const shell = await caches.match(SHELL);
+    const shell = await (await caches.open(CACHE)).match(SHELL);
     const asked = fetch(request).catch(() => null);
     if (!shell) return (await asked) ?? Response.error();
     if (!WORKS_OFFLINE.test(path)) return (await asked) ?? shell;

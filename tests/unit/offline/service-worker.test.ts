@@ -32,7 +32,9 @@ beforeEach(() => {
       ? new Response(SHELL)
       : path.endsWith('.css')
         ? new Response('@font-face{src:url(../static/media/face.woff2)}')
-        : new Response(`content of ${path}`);
+        : path.endsWith('late.js')
+          ? new Response('load("static/chunks/when-needed.js")')
+          : new Response(`content of ${path}`);
   const open = (name: string) => {
     const known = stores.get(name) ?? new FakeCache();
     stores.set(name, known);
@@ -61,10 +63,12 @@ afterEach(() => void vi.unstubAllGlobals());
 function start(build: string) {
   const listeners = new Map<string, (event: never) => void>();
   const claim = vi.fn(() => Promise.resolve());
+  const skipWaiting = vi.fn(() => Promise.resolve());
   serviceWorker(
     {
       location: { origin: ORIGIN },
       clients: { claim },
+      skipWaiting,
       addEventListener: (type: string, listener: (event: never) => void) => listeners.set(type, listener),
     } as never,
     build,
@@ -83,13 +87,13 @@ function start(build: string) {
     } as never);
     return answer ? (await (answer as Promise<Response>)).text() : null;
   };
-  return { run, ask, claim };
+  return { run, ask, claim, skipWaiting };
 }
 
 const survey = '/s/shop/jobs/job/survey';
 
 describe('the service worker', () => {
-  it('keeps the page with all that it loads, fonts and late chunks too, under a policy with its scripts’ hashes', async () => {
+  it('keeps the page with all that it loads, fonts and pieces fetched later too, under a policy with its scripts’ hashes', async () => {
     const worker = start('one');
     await worker.run('install');
     const kept = stores.get('lampwright-one')?.kept ?? new Map<string, Response>();
@@ -97,6 +101,7 @@ describe('the service worker', () => {
       '/_next/static/a.css',
       '/_next/static/chunks/late.js',
       '/_next/static/chunks/main.js',
+      '/_next/static/chunks/when-needed.js',
       '/_next/static/media/face.woff2',
       '/offline',
     ]);
@@ -152,18 +157,35 @@ describe('the service worker', () => {
     expect([...(stores.get('lampwright-one')?.kept.keys() ?? [])]).toEqual(before);
   });
 
-  it('a new build waits beside the old one, whose open tabs keep their files; it clears up when it takes over', async () => {
-    const older = start('one');
+  it('a new build takes over at once; a tab of the build before keeps its files, and no signal shows the newest page', async () => {
+    const [first, second, third] = ['mi0000a', 'mi0000b', 'mi0000c'] as const;
+    const older = start(first);
     await older.run('install');
     await older.run('activate');
     server = (path) =>
       path === '/offline' ? new Response('<html>two</html>') : new Response('', { status: 404 });
-    const newer = start('two');
+    const newer = start(second);
     await newer.run('install');
-    expect(await older.ask('/_next/static/chunks/main.js', 'no-cors')).toContain('main.js');
-    expect([...stores.keys()]).toEqual(['lampwright-one', 'lampwright-two']);
-    expect(newer.claim).not.toHaveBeenCalled();
+    expect(newer.skipWaiting).toHaveBeenCalled();
     await newer.run('activate');
-    expect([...stores.keys()]).toEqual(['lampwright-two']);
+    expect(newer.claim).toHaveBeenCalled();
+    expect([...stores.keys()]).toEqual([`lampwright-${first}`, `lampwright-${second}`]);
+    expect(await newer.ask('/_next/static/chunks/main.js', 'no-cors')).toContain('main.js');
+    const whole = server;
+    server = null;
+    expect(await newer.ask(survey)).toBe('<html>two</html>');
+    server = whole;
+    const newest = start(third);
+    await newest.run('install');
+    await newest.run('activate');
+    expect([...stores.keys()]).toEqual([`lampwright-${second}`, `lampwright-${third}`]);
+  });
+
+  it('leaves what is not its own in the browser’s caches alone', async () => {
+    stores.set('another-site', new FakeCache());
+    const worker = start('one');
+    await worker.run('install');
+    await worker.run('activate');
+    expect(stores.has('another-site')).toBe(true);
   });
 });
