@@ -108,6 +108,11 @@ test('nothing of a person stays after sign-out', async ({ browser }) => {
       .filter((path) => !path.startsWith('/_next/static/')),
   }));
   expect(kept).toEqual({ stores: [], persons: [], pages: ['/offline'] });
+  // The one page that is kept holds nothing of shop, person or job.
+  const shell = await page.evaluate(async () => (await caches.match('/offline'))?.text());
+  expect(shell).toContain('Working from this device');
+  for (const secret of [shop.shopId, job, shop.actors.estimator.name, shop.actors.estimator.membershipId])
+    expect(shell).not.toContain(secret);
 
   await server.stop();
   await page.goto(survey());
